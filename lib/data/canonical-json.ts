@@ -1,0 +1,8 @@
+/** JSON with the keys of every object in order, so that equal content gives equal text. */
+export function canonicalJson(value: unknown): string {
+  return JSON.stringify(value, (_key, each: unknown) =>
+    each !== null && typeof each === "object" && !Array.isArray(each)
+      ? Object.fromEntries(Object.entries(each).sort(([a], [b]) => (a < b ? -1 : a > b ? 1 : 0)))
+      : each,
+  );
+}
