@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import { isRole, type Actor } from "@/lib/core/policy/policy";
 import { db } from "@/models/database";
 
@@ -29,6 +29,6 @@ export async function endSession(id: string): Promise<void> {
 }
 
 /** Ends every session of a person at once; used when they leave, change their password or lose a role. */
-export async function endSessionsOf(personId: number): Promise<void> {
-  await db().Session.update({ revokedAt: new Date() }, { where: { personId, revokedAt: null } });
+export async function endSessionsOf(personId: number, transaction?: Transaction): Promise<void> {
+  await db().Session.update({ revokedAt: new Date() }, { where: { personId, revokedAt: null }, transaction });
 }
