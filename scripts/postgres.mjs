@@ -151,7 +151,13 @@ async function bringUp(run, folder, data, durable) {
 async function keptPort(folder) {
   const file = path.join(folder, "port");
   const kept = fs.existsSync(file) ? Number(fs.readFileSync(file, "utf8")) : 0;
-  const port = (kept > 0 && (await freePort(kept))) || (await freePort(0));
+  let port = 0;
+  // A start beside this one may be looking at the same port at this very moment: look again before giving it up.
+  for (let look = 0; kept > 0 && port === 0 && look < 5; look += 1) {
+    if (look > 0) await sleep(30 + Math.random() * 100);
+    port = await freePort(kept);
+  }
+  port ||= await freePort(0);
   fs.writeFileSync(file, `${port}\n`);
   return port;
 }
