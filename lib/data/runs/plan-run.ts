@@ -65,7 +65,7 @@ export async function listPlanBolts(fabricIds: readonly number[], transaction?: 
             b.cut_edge AS "cutEdge", b.put_up AS "putUp"
        FROM bolts b JOIN fabrics f ON f.id = b.fabric_id
       WHERE b.fabric_id = ANY($1) AND b.retired_at IS NULL AND b.cut_edge < b.put_up
-      ORDER BY b.id ${transaction ? "FOR UPDATE OF b" : ""}`,
+      ORDER BY b.id ${transaction ? "FOR NO KEY UPDATE OF b" : ""}`,
     { bind: [[...fabricIds]], type: QueryTypes.SELECT, transaction },
   );
   const ids = bolts.map((bolt) => bolt.id);

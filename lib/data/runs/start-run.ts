@@ -9,9 +9,11 @@ import { queuePrint } from "@/lib/data/print/queue";
 import { recordChange } from "@/lib/data/record-change";
 import { bumpRevision } from "@/lib/data/revisions";
 import { requireShop } from "@/lib/data/shop";
+import { lockBolts } from "@/lib/data/stock/lock-bolts";
+import { changePromise } from "@/lib/data/stock/promises";
+import { settleBolt } from "@/lib/data/stock/settle-bolt";
 import { db } from "@/models/database";
 import { planOnBolts } from "./plan-run";
-
 
 export interface StartRunInput {
   readonly requestId: string;
@@ -97,17 +99,26 @@ async function layLengths(transaction: Transaction, { runId, plan, lengths, kits
   await db().RunLength.bulkCreate(rows, { transaction });
 }
 
+/** The plan was made under the bolts' locks, so every promise fits; one that does not is a fault of the planner. */
 async function reserve(transaction: Transaction, actor: Actor, runId: number, plan: BoltPlan): Promise<void> {
   const boltIds = await boltIdsOf(transaction, plan);
-  const counts = new Map<string, { boltId: number; length: number; count: number }>();
-  for (const cut of kitCuts(plan)) {
-    const boltId = need(boltIds.get(cut.bolt));
-    const length = cut.endsAt - cut.startsAt;
-    const row = counts.get(`${boltId}/${length}`) ?? { boltId, length, count: 0 };
-    counts.set(`${boltId}/${length}`, { ...row, count: row.count + 1 });
+  for (const { bolt, length, count } of promisesOf(plan)) {
+    await changePromise(transaction, { boltId: need(boltIds.get(bolt)), runId, length }, count, actor.personId);
   }
-  await db().Reservation.bulkCreate([...counts.values()].map((row) => ({ ...row, runId, madeBy: actor.personId })), { transaction });
-  await refreshReserved(transaction, [...new Set([...counts.values()].map((row) => row.boltId))]);
+  for (const bolt of (await lockBolts(transaction, [...boltIds.values()])).values()) {
+    const short = await settleBolt(transaction, actor, bolt);
+    if (short.length) throw new Error(`The bolt plan promised more of bolt ${bolt.tag} than fits on it.`);
+  }
+}
+
+function promisesOf(plan: BoltPlan): { bolt: string; length: number; count: number }[] {
+  const promises = new Map<string, { bolt: string; length: number; count: number }>();
+  for (const cut of kitCuts(plan)) {
+    const length = cut.endsAt - cut.startsAt;
+    const key = `${cut.bolt}/${length}`;
+    promises.set(key, { bolt: cut.bolt, length, count: 1 + (promises.get(key)?.count ?? 0) });
+  }
+  return [...promises.values()];
 }
 
 async function queueBagTags(transaction: Transaction, actor: Actor, { code, name, kits }: { code: string; name: string; kits: readonly KitRow[] }): Promise<void> {
