@@ -1,6 +1,6 @@
 import type { TestProject } from "vitest/node";
-import { joinTestCluster } from "../../scripts/test-cluster.mjs";
-import { dropLeftovers, migratedTemplate } from "./templates";
+import { joinTestCluster } from "@/scripts/test-cluster.mjs";
+import { dropLeftovers, migratedTemplate } from "@/scripts/test-templates";
 
 declare module "vitest" {
   interface ProvidedContext {

@@ -2,7 +2,7 @@ import { randomBytes } from "node:crypto";
 import { Client } from "pg";
 import { afterAll, beforeAll, inject } from "vitest";
 import { closeDb, makeDb, useDb } from "@/models/database";
-import { databaseUrl, seededTemplate } from "./templates";
+import { databaseUrl, seededTemplate } from "@/scripts/test-templates";
 
 export interface TestDatabase {
   /** Known once the tests run; read it inside a test or a hook, not while the file is being loaded. */

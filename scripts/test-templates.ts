@@ -3,9 +3,9 @@ import path from "node:path";
 import { promisify } from "node:util";
 import { Client } from "pg";
 import { migrateUp } from "@/migrations/migrate";
-import { sourceHash } from "../../scripts/source-hash.mjs";
+import { sourceHash } from "./source-hash.mjs";
 
-const ROOT = path.resolve(import.meta.dirname, "../..");
+const ROOT = path.resolve(import.meta.dirname, "..");
 const MIGRATION_SOURCES = ["migrations"];
 /** The seed goes through the data layer, so a change there is a change of the seeded shop. */
 const SEED_SOURCES = ["migrations", "models", "seeders", "lib", "labels", "package-lock.json"];
