@@ -1,0 +1,14 @@
+import { spawn } from "node:child_process";
+
+/**
+ * Runs a Node.js program to its end and shows what it prints.
+ * @param {string[]} args @param {{ cwd: string, env?: NodeJS.ProcessEnv }} options
+ * @returns {Promise<number>} its exit code; 1 when a signal ended it.
+ */
+export function runNode(args, { cwd, env = process.env }) {
+  return new Promise((resolve, reject) => {
+    const child = spawn(process.execPath, args, { cwd, env, stdio: ["ignore", "inherit", "inherit"] });
+    child.once("error", reject);
+    child.once("exit", (code) => resolve(code ?? 1));
+  });
+}
