@@ -60,7 +60,8 @@ function barsOf(widths: readonly number[], module: number): [number, number, num
 
 /** QR code, error correction M, five dots a module; `module` may be made smaller where room is short. */
 export function qr(text: string, module = QR_MODULE): Symbol {
-  const [symbol] = bwip.raw({ bcid: "qrcode", text: utf8(text), eclevel: "M" });
+  const options = { bcid: "qrcode", text: utf8(text), eclevel: "M" };
+  const [symbol] = bwip.raw(options);
   if (!symbol || !("pixs" in symbol)) throw new Error("The QR code came without its modules");
   const side = symbol.pixx;
   const bars: [number, number, number, number][] = [];

@@ -1,4 +1,4 @@
-import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_INCH, PER_METRE, type Length } from "../../lib/core/measure/length";
+import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_INCH, PER_METRE, PER_YARD, type Length } from "../../lib/core/measure/length";
 
 /** Which units the shop sells and cuts in. */
 export type Measure = "yards" | "metres";
@@ -19,12 +19,17 @@ function mixed(parts: number, perWhole: number): string {
   return `${whole > 0 ? `${whole} ` : ""}${over}${SOLIDUS}${under}`;
 }
 
-/** As cloth is sold: eighths of a yard, or metres to the centimetre. What falls on neither is said in inches or centimetres. */
+/** As cloth is sold: eighths of a yard, or metres to the millimetre. What falls between eighths is said in yards and inches. */
 export function soldLength(value: Length, measure: Measure): string {
-  const figure = soldFigure(value, measure);
-  return `${figure.figure}${NO_BREAK}${figure.unit}`;
+  const { figure, unit } = soldFigure(value, measure);
+  const yards = Math.floor(value / PER_YARD);
+  if (unit === "in" && yards > 0) {
+    return `${yards}${NO_BREAK}yd ${mixed(Math.round(((value - yards * PER_YARD) / PER_INCH) * 32), 32)}${NO_BREAK}in`;
+  }
+  return `${figure}${NO_BREAK}${unit}`;
 }
 
+/** One figure and its unit, for columns that stand under each other. */
 export function soldFigure(value: Length, measure: Measure): { readonly figure: string; readonly unit: string } {
   if (measure === "metres") return { figure: trimmed(value / PER_METRE, 3), unit: "m" };
   if (value % PER_EIGHTH_YARD === 0) return { figure: mixed(value / PER_EIGHTH_YARD, 8), unit: "yd" };

@@ -19,6 +19,8 @@ export interface PressOptions {
   /** BCP 47, for screen readers. */
   readonly language?: string;
   readonly author?: string;
+  /** Keeps the pages open until the end, so that each can say how many there are. */
+  readonly countsPages?: boolean;
 }
 
 /** One PDF being made. Fonts are parsed once a document, so many labels belong into one. */
@@ -30,13 +32,14 @@ export interface Press {
 }
 
 /** Opens a document that asks the viewer for no scaling, so that a printed inch is an inch. */
-export function openPress({ title, language = "en", author }: PressOptions): Press {
+export function openPress({ title, language = "en", author, countsPages = false }: PressOptions): Press {
   const doc = new PDFDocument({
     autoFirstPage: false,
     pdfVersion: "1.7",
     lang: language,
     displayTitle: true,
     margin: 0,
+    bufferPages: countsPages,
     info: { Title: title, Creator: "Ellwand", ...(author ? { Author: author } : {}) },
   });
   const chunks: Buffer[] = [];
