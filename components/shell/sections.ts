@@ -1,0 +1,38 @@
+import { can, type Actor, type Permission } from "@/lib/core/policy/policy";
+
+export interface Section {
+  readonly href: string;
+  readonly label: string;
+  readonly permission: Permission;
+}
+
+/** The rooms of the back office, in the order of the work: drawn, cut, sold, and what keeps it going. */
+export const SECTIONS: readonly Section[] = [
+  { href: "/staff", label: "Today", permission: "today.see" },
+  { href: "/staff/blocks", label: "Blocks", permission: "block.see" },
+  { href: "/staff/quilts", label: "Quilts", permission: "quilt.see" },
+  { href: "/staff/kits", label: "Kits", permission: "kit.see" },
+  { href: "/staff/bolts", label: "Bolts", permission: "bolt.see" },
+  { href: "/staff/runs", label: "Runs", permission: "run.see" },
+  { href: "/table", label: "Cutting", permission: "run.cut" },
+  { href: "/counter", label: "Counter", permission: "till.sell" },
+  { href: "/staff/exceptions", label: "Exceptions", permission: "exception.see" },
+];
+
+/** What lies on the slip under the person's name. */
+export const OFFICE_SECTIONS: readonly Section[] = [
+  { href: "/staff/print", label: "Print queue", permission: "print.see" },
+  { href: "/staff/people", label: "People", permission: "people.see" },
+  { href: "/staff/mail", label: "Mail", permission: "mail.read" },
+  { href: "/staff/settings", label: "Settings", permission: "settings.see" },
+];
+
+export function sectionsFor(person: Pick<Actor, "roles">, sections: readonly Section[] = SECTIONS): readonly Section[] {
+  return sections.filter((section) => can(person, section.permission));
+}
+
+/** The section a path lies in: the longest address that it begins with, so that Today does not claim every room. */
+export function currentSection(path: string, sections: readonly Section[]): Section | null {
+  const within = sections.filter((section) => path === section.href || path.startsWith(`${section.href}/`));
+  return within.reduce<Section | null>((best, section) => (best && best.href.length >= section.href.length ? best : section), null);
+}
