@@ -1,12 +1,12 @@
 import type { Transaction } from "sequelize";
-import { MAX_LENGTH } from "@/lib/core/measure/length";
+import { formatLength } from "@/lib/core/measure/format";
+import { MAX_LENGTH, PER_YARD } from "@/lib/core/measure/length";
 import type { Actor } from "@/lib/core/policy/policy";
 import type { CutPurpose } from "@/lib/data/bolt-view";
 import { postMove, type Place } from "@/lib/data/ledger";
 import { raiseException } from "@/lib/data/raise-exception";
 import { db } from "@/models/database";
 import type { LockedBolt } from "./lock-bolts";
-import { sayLength } from "./say-length";
 import { readShopRules } from "./shop-rules";
 
 export interface NewCut {
@@ -63,16 +63,19 @@ export async function appendCut(transaction: Transaction, actor: Pick<Actor, "pe
   return { cutId: row.id, bolt: { ...bolt, cutEdge: endsAt, putUp: Math.max(bolt.putUp, endsAt) }, found };
 }
 
-/** Whether the bolt's line would leave what a length can hold: the one cut that cannot be a fact. */
+/** No table cuts more at once; a longer one is a slip of the fingers and the one cut that cannot be a fact. */
+const LONGEST_CUT = 1000 * PER_YARD;
+export const ABSURD_CUT = "A cut is longer than nothing and at most 1000 yd.";
+
 export function isAbsurdCut(bolt: LockedBolt, length: number): boolean {
-  return !Number.isSafeInteger(length) || length <= 0 || bolt.cutEdge + length > MAX_LENGTH;
+  return !Number.isSafeInteger(length) || length <= 0 || length > LONGEST_CUT || bolt.cutEdge + length > MAX_LENGTH;
 }
 
 async function tellCorrection(transaction: Transaction, bolt: LockedBolt, length: number, found: number): Promise<void> {
   const { system } = await readShopRules(transaction);
   await raiseException(transaction, {
     kind: "book-corrected",
-    sentence: `${sayLength(length, system)} were cut from bolt ${bolt.tag} (${bolt.fabricName}), but the book said that only ${sayLength(bolt.putUp - bolt.cutEdge, system)} were left. The book now follows the cut.`,
+    sentence: `${formatLength(length, system)} were cut from bolt ${bolt.tag} (${bolt.fabricName}), but the book said that only ${formatLength(bolt.putUp - bolt.cutEdge, system)} were left. The book now follows the cut.`,
     boltId: bolt.id,
     facts: { tag: bolt.tag, length, left: bolt.putUp - bolt.cutEdge, found },
   });

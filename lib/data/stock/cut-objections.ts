@@ -1,9 +1,9 @@
 import { QueryTypes, type Transaction } from "sequelize";
+import { formatCentimetres, formatInches } from "@/lib/core/measure/format";
 import { fail, type Fault } from "@/lib/core/result";
 import { db } from "@/models/database";
 import type { LockedBolt } from "./lock-bolts";
 import type { LockedRunLength } from "./run-length";
-import { sayLength } from "./say-length";
 import { readShopRules } from "./shop-rules";
 
 export type CutObjection = "wrong-fabric" | "wrong-lot" | "too-narrow" | "already-cut" | "length-cancelled";
@@ -57,5 +57,5 @@ async function cutBy(transaction: Transaction, cutId: number | null): Promise<st
 
 /** Widths are said in inches or centimetres, never in yards. */
 function sayWidth(width: number, system: "yards" | "metres"): string {
-  return system === "metres" ? `${Number((width / 1600).toFixed(1))} cm` : `${Number((width / 4064).toFixed(3))} in`;
+  return system === "metres" ? `${formatCentimetres(width)} cm` : `${formatInches(width)} in`;
 }

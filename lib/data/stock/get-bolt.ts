@@ -4,13 +4,14 @@ import { fail, ok, type Result } from "@/lib/core/result";
 import { fromCore, type BoltDetail, type BoltView, type CutView, type HistoryView, type ReservationView } from "@/lib/data/bolt-view";
 import { db } from "@/models/database";
 import { loadBolts } from "./load-bolts";
+import { asTag } from "./lock-bolts";
 
 const MOST_HISTORY = 100;
 
 /** One bolt with its chain of cuts, its flaws, what is promised on it and its trail. Faults: `forbidden`, `unknown-bolt`. */
 export async function getBolt(actor: Actor, { tag }: { tag: string }): Promise<Result<BoltDetail, "forbidden" | "unknown-bolt">> {
   if (!can(actor, "bolt.see")) return fail("forbidden", "Bolts are shown to people who work here.");
-  const [bolt] = await loadBolts({ where: "b.tag = $1", bind: [tag.trim().toUpperCase()] });
+  const [bolt] = await loadBolts({ where: "b.tag = $1", bind: [asTag(tag)] });
   if (!bolt) return fail("unknown-bolt", `No bolt has the tag ${tag}. Scan the tag on the bolt's end, or find the bolt by its fabric.`);
   const [cuts, reservations, history] = await Promise.all([readCuts(bolt), readReservations(bolt.id), readHistory(bolt.id)]);
   return ok({ ...bolt, cuts, reservations, history });

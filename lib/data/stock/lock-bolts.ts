@@ -38,6 +38,11 @@ export async function lockBoltByTag(transaction: Transaction, tag: string): Prom
 
 /** A bolt's id by its tag, without a lock; tags never change. */
 export async function boltIdOf(transaction: Transaction, tag: string): Promise<number | null> {
-  const row = await db().Bolt.findOne({ where: { tag: tag.trim().toUpperCase() }, attributes: ["id"], transaction, raw: true });
+  const row = await db().Bolt.findOne({ where: { tag: asTag(tag) }, attributes: ["id"], transaction, raw: true });
   return row?.id ?? null;
+}
+
+/** A tag as it stands in the book, from one that was typed with small letters, spaces or hyphens. */
+export function asTag(typed: string): string {
+  return typed.slice(0, 60).toUpperCase().replaceAll(/[\s-]/g, "");
 }

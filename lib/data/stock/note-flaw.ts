@@ -1,3 +1,4 @@
+import { formatLength } from "@/lib/core/measure/format";
 import { can, type Actor } from "@/lib/core/policy/policy";
 import { fail, ok, type Result } from "@/lib/core/result";
 import { answerOnce, type OnceInput } from "@/lib/data/answer-once";
@@ -6,7 +7,6 @@ import { recordChange } from "@/lib/data/record-change";
 import { db } from "@/models/database";
 import { loadBolt } from "./load-bolts";
 import { lockBoltByTag } from "./lock-bolts";
-import { sayLength } from "./say-length";
 import { settleBolt } from "./settle-bolt";
 import { readShopRules } from "./shop-rules";
 
@@ -35,7 +35,7 @@ export async function noteFlaw(actor: Actor, input: FlawInput): Promise<Result<B
     const left = bolt.putUp - bolt.cutEdge;
     if (input.toEdge > left) {
       const { system } = await readShopRules(transaction);
-      return fail("off-the-bolt", `The flaw would end ${sayLength(input.toEdge, system)} from the cut edge, but only ${sayLength(left, system)} are left on bolt ${bolt.tag}. Measure the bolt first.`, {
+      return fail("off-the-bolt", `The flaw would end ${formatLength(input.toEdge, system)} from the cut edge, but only ${formatLength(left, system)} are left on bolt ${bolt.tag}. Measure the bolt first.`, {
         facts: { left },
       });
     }

@@ -7,7 +7,7 @@ import { raiseException } from "@/lib/data/raise-exception";
 import { recordChange } from "@/lib/data/record-change";
 import { bumpRevision } from "@/lib/data/revisions";
 import { db } from "@/models/database";
-import { appendCut, isAbsurdCut } from "./append-cut";
+import { ABSURD_CUT, appendCut, isAbsurdCut } from "./append-cut";
 import { objectionTo, type CutObjection } from "./cut-objections";
 import { loadBolt } from "./load-bolts";
 import { boltIdOf, lockBolts, type LockedBolt } from "./lock-bolts";
@@ -55,7 +55,7 @@ export async function recordCut(actor: Actor, input: RecordCutInput): Promise<Re
     const found = await lockForCut(transaction, input);
     if (!found.ok) return found;
     const { bolt, runLength } = found.value;
-    if (isAbsurdCut(bolt, input.length)) return fail("absurd-length", "A cut is longer than nothing and shorter than 14 000 yd.");
+    if (isAbsurdCut(bolt, input.length)) return fail("absurd-length", ABSURD_CUT);
     const objection = await objectionTo(transaction, runLength, bolt);
     if (objection && !input.asFact) return objection;
     return ok(objection ? await bookMisCut(transaction, actor, input, bolt, runLength, objection.fault.message) : await bookKitCut(transaction, actor, input, bolt, runLength));

@@ -3,7 +3,7 @@ import { fail, ok, type Result } from "@/lib/core/result";
 import { answerOnce, type OnceInput } from "@/lib/data/answer-once";
 import type { BoltChange } from "@/lib/data/bolt-view";
 import { recordChange } from "@/lib/data/record-change";
-import { appendCut, isAbsurdCut } from "./append-cut";
+import { ABSURD_CUT, appendCut, isAbsurdCut } from "./append-cut";
 import { loadBolt } from "./load-bolts";
 import { lockBoltByTag } from "./lock-bolts";
 import { settleBolt } from "./settle-bolt";
@@ -39,7 +39,7 @@ export async function recordWasteCut(
   return answerOnce(actor, "bolt.waste", input, async (transaction) => {
     const before = await lockBoltByTag(transaction, input.tag);
     if (!before) return fail("unknown-bolt", `No bolt has the tag ${input.tag}. Scan the tag on the bolt's end.`);
-    if (isAbsurdCut(before, input.length)) return fail("absurd-length", "A cut is longer than nothing and shorter than 14 000 yd.");
+    if (isAbsurdCut(before, input.length)) return fail("absurd-length", ABSURD_CUT);
     const { purpose, place, reason, act } = KINDS[input.kind];
     const cut = await appendCut(transaction, actor, before, {
       length: input.length,

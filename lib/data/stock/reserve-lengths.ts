@@ -1,4 +1,5 @@
 import { QueryTypes, type Transaction } from "sequelize";
+import { formatLength } from "@/lib/core/measure/format";
 import { can, type Actor } from "@/lib/core/policy/policy";
 import { fail, ok, type Fault, type Result } from "@/lib/core/result";
 import { answerOnce, type OnceInput } from "@/lib/data/answer-once";
@@ -10,7 +11,6 @@ import { clothHolds } from "./cloth";
 import { loadBolts } from "./load-bolts";
 import { lockBolts, type LockedBolt } from "./lock-bolts";
 import { changePromise, readPromises } from "./promises";
-import { sayLength } from "./say-length";
 import { settleBolt } from "./settle-bolt";
 import { readShopRules } from "./shop-rules";
 
@@ -79,8 +79,8 @@ async function refuse(transaction: Transaction, bolts: ReadonlyMap<number, Locke
   }
   if (refused.length === 0) return null;
   const sentences = refused.map(({ tag, left, reserved, wanted }) => {
-    const pieces = wanted.map(({ length, count }) => `${count} of ${sayLength(length, system)}`).join(" and ");
-    return `Bolt ${tag} has ${sayLength(left, system)} left, of which ${sayLength(reserved, system)} are promised; ${pieces} do not fit beside that.`;
+    const pieces = wanted.map(({ length, count }) => `${count} of ${formatLength(length, system)}`).join(" and ");
+    return `Bolt ${tag} has ${formatLength(left, system)} left, of which ${formatLength(reserved, system)} are promised; ${pieces} do not fit beside that.`;
   });
   return fail("does-not-fit", sentences.slice(0, 3).join(" "), { facts: { refused } });
 }

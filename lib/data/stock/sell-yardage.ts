@@ -1,14 +1,14 @@
 import type { Transaction } from "sequelize";
+import { formatLength } from "@/lib/core/measure/format";
 import { can, type Actor } from "@/lib/core/policy/policy";
 import { fail, ok, type Result } from "@/lib/core/result";
 import type { ShortView } from "@/lib/data/bolt-view";
 import { recordChange } from "@/lib/data/record-change";
 import { db } from "@/models/database";
-import { appendCut, isAbsurdCut } from "./append-cut";
+import { ABSURD_CUT, appendCut, isAbsurdCut } from "./append-cut";
 import { clothHolds, toSell } from "./cloth";
-import { boltIdOf, lockBolts, type LockedBolt } from "./lock-bolts";
+import { asTag, boltIdOf, lockBolts, type LockedBolt } from "./lock-bolts";
 import { readPromises } from "./promises";
-import { sayLength } from "./say-length";
 import { settleBolt } from "./settle-bolt";
 import { readShopRules } from "./shop-rules";
 
@@ -41,7 +41,7 @@ export type SellFault = "unknown-bolt" | "absurd-length" | "too-short" | "takes-
 
 /** Locks every bolt of a sale in id order, before its lines are sold one by one. Tags that are not known are left to `sellFromBolt`. */
 export async function lockBoltsOfSale(transaction: Transaction, tags: readonly string[]): Promise<void> {
-  const bolts = await db().Bolt.findAll({ where: { tag: tags.map((tag) => tag.trim().toUpperCase()) }, attributes: ["id"], transaction, raw: true });
+  const bolts = await db().Bolt.findAll({ where: { tag: tags.map(asTag) }, attributes: ["id"], transaction, raw: true });
   await lockBolts(transaction, bolts.map((bolt) => bolt.id));
 }
 
@@ -55,7 +55,7 @@ export async function sellFromBolt(transaction: Transaction, actor: Actor, input
   const id = await boltIdOf(transaction, input.tag);
   const before = id === null ? undefined : (await lockBolts(transaction, [id])).get(id);
   if (!before) return fail("unknown-bolt", `No bolt has the tag ${input.tag}. Scan the tag on the bolt's end.`);
-  if (isAbsurdCut(before, input.length)) return fail("absurd-length", "A cut is longer than nothing and shorter than 14 000 yd.");
+  if (isAbsurdCut(before, input.length)) return fail("absurd-length", ABSURD_CUT);
   if (!input.asFact) {
     const refusal = await refuse(transaction, actor, before, input);
     if (!refusal.ok) return refusal;
@@ -83,7 +83,7 @@ async function refuse(transaction: Transaction, actor: Actor, bolt: LockedBolt, 
   const { system, straightening } = await readShopRules(transaction);
   const left = bolt.putUp - bolt.cutEdge;
   if (input.length > left) {
-    return fail("too-short", `Bolt ${bolt.tag} has ${sayLength(left, system)} left by the book; ${sayLength(input.length, system)} are wanted. Measure it, or take another bolt.`, { facts: { left } });
+    return fail("too-short", `Bolt ${bolt.tag} has ${formatLength(left, system)} left by the book; ${formatLength(input.length, system)} are wanted. Measure it, or take another bolt.`, { facts: { left } });
   }
   const held = (await readPromises(transaction, bolt.id)).map((promise) => ({ length: promise.length, count: promise.held }));
   const flaws = await db().Flaw.findAll({ where: { boltId: bolt.id }, attributes: ["startsAt", "endsAt"], transaction, raw: true });
@@ -95,7 +95,7 @@ async function refuse(transaction: Transaction, actor: Actor, bolt: LockedBolt, 
     const how = mayTake ? "It can be taken with a reason." : "A manager can take it with a reason.";
     return fail(
       "takes-reserved",
-      `Of the ${sayLength(left, system)} left on bolt ${bolt.tag}, ${sayLength(bolt.reserved, system)} are promised; ${sayLength(free, system)} can be sold on one piece. ${how}`,
+      `Of the ${formatLength(left, system)} left on bolt ${bolt.tag}, ${formatLength(bolt.reserved, system)} are promised; ${formatLength(free, system)} can be sold on one piece. ${how}`,
       { facts: { left, reserved: bolt.reserved, toSell: free, mayTake } },
     );
   }

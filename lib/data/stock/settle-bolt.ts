@@ -1,4 +1,5 @@
 import { QueryTypes, type Transaction } from "sequelize";
+import { formatLength } from "@/lib/core/measure/format";
 import type { Actor } from "@/lib/core/policy/policy";
 import type { ShortView } from "@/lib/data/bolt-view";
 import { raiseException } from "@/lib/data/raise-exception";
@@ -7,7 +8,6 @@ import { db } from "@/models/database";
 import { clothHolds, howManyFit, type Cloth, type Demand } from "./cloth";
 import type { LockedBolt } from "./lock-bolts";
 import { readPromises, writePromise, type BoltPromise } from "./promises";
-import { sayLength } from "./say-length";
 import { readShopRules, type ShopRules } from "./shop-rules";
 
 /**
@@ -66,15 +66,17 @@ async function readFlaws(transaction: Transaction, boltId: number): Promise<{ st
 }
 
 async function tellShort(transaction: Transaction, bolt: LockedBolt, promises: readonly BoltPromise[], kept: readonly number[], { system }: ShopRules): Promise<ShortView[]> {
+  // Listed as they gave way: the last to be kept first.
   const short = promises
     .map((promise, index) => ({ runId: promise.runId, runCode: promise.runCode, length: promise.length, count: promise.held - (kept[index] ?? 0) }))
-    .filter((each) => each.count > 0);
+    .filter((each) => each.count > 0)
+    .reverse();
   for (const each of short) {
     const whom = each.runCode ? `for run ${each.runCode}` : "put aside";
     const pieces = each.count === 1 ? "1 piece" : `${each.count} pieces`;
     await raiseException(transaction, {
       kind: "reservation-short",
-      sentence: `${pieces} of ${sayLength(each.length, system)} ${bolt.fabricName} ${whom} no longer fit on bolt ${bolt.tag}: ${sayLength(bolt.putUp - bolt.cutEdge, system)} are left on it.`,
+      sentence: `${pieces} of ${formatLength(each.length, system)} ${bolt.fabricName} ${whom} no longer fit on bolt ${bolt.tag}: ${formatLength(bolt.putUp - bolt.cutEdge, system)} are left on it.`,
       boltId: bolt.id,
       runId: each.runId,
       facts: { tag: bolt.tag, length: each.length, count: each.count, left: bolt.putUp - bolt.cutEdge },
