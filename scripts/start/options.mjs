@@ -13,7 +13,7 @@ const HELP = `npm start -- [options]
  */
 
 /**
- * @param {string[]} args @param {NodeJS.ProcessEnv} environment
+ * @param {string[]} args @param {{ PORT?: string, DATABASE_URL?: string }} environment
  * @returns {StartOptions | null} null when only help was asked for.
  */
 export function startOptions(args, environment) {

@@ -48,7 +48,7 @@ function textOf(part: Part): string {
 function bodyBytes(part: Part): Buffer {
   const encoding = (part.headers.get("content-transfer-encoding") ?? "7bit").toLowerCase();
   if (encoding === "base64") return Buffer.from(part.body, "base64");
-  if (encoding === "quoted-printable") return quotedBytes(part.body.replace(/[ \t]*=\n/g, ""));
+  if (encoding === "quoted-printable") return quotedBytes(part.body.replace(/=[ \t]*\n/g, ""));
   return Buffer.from(part.body, "latin1");
 }
 
