@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import { db } from "@/models/database";
 
 /** Something that does not add up: what the book says (`found`) against what its rows add up to (`wanted`). */
@@ -32,8 +32,9 @@ const CHECKS: Readonly<Record<string, string>> = {
   "the chain of cuts has no gap and no overlap": `
     SELECT 'bolt ' || b.tag, b.cut_edge, COALESCE(SUM(c.ends_at - c.starts_at), 0) FROM bolts b LEFT JOIN cuts c ON c.bolt_id = b.id GROUP BY b.id`,
   "each cut moved its cloth": `
-    SELECT 'cut ' || c.id, c.ends_at - c.starts_at, COALESCE((SELECT SUM(m.quantity) FROM moves m
-             WHERE m.cut_id = c.id AND m.from_place = 'bolt' AND m.from_id = c.bolt_id AND m.reverses_id IS NULL), 0) FROM cuts c`,
+    SELECT 'cut ' || c.id, c.ends_at - c.starts_at, COALESCE(m.quantity, 0) FROM cuts c LEFT JOIN (
+        SELECT cut_id, from_id, SUM(quantity) AS quantity FROM moves
+         WHERE cut_id IS NOT NULL AND from_place = 'bolt' AND reverses_id IS NULL GROUP BY cut_id, from_id) m ON m.cut_id = c.id AND m.from_id = c.bolt_id`,
   "reserved on the bolt equals what is held": `
     SELECT 'bolt ' || b.tag, b.reserved, COALESCE(SUM(r.length::bigint * r.count), 0)
       FROM bolts b LEFT JOIN reservations r ON r.bolt_id = b.id AND r.state = 'held' GROUP BY b.id`,
@@ -55,13 +56,15 @@ const CHECKS: Readonly<Record<string, string>> = {
     SELECT 'length ' || l.id, COUNT(*) FILTER (WHERE c.run_length_id IS DISTINCT FROM l.id OR c.purpose <> 'kit'), 0
       FROM run_lengths l JOIN cuts c ON c.id = l.cut_id GROUP BY l.id`,
   "bag and kit hold what was cut for them": `
-    SELECT 'kit ' || k.serial, COALESCE((SELECT SUM(a.quantity) FROM at_place a WHERE a.place IN ('bag','kit') AND a.id = k.id AND a.item = 'fabric'), 0),
-           COALESCE((SELECT SUM(c.ends_at - c.starts_at) FROM run_lengths l JOIN cuts c ON c.id = l.cut_id WHERE l.run_kit_id = k.id), 0)
-      FROM run_kits k WHERE k.state <> 'broken-down'`,
+    SELECT 'kit ' || k.serial, COALESCE(h.quantity, 0), COALESCE(c.quantity, 0) FROM run_kits k
+      LEFT JOIN (SELECT id, SUM(quantity) AS quantity FROM at_place WHERE place IN ('bag','kit') AND item = 'fabric' GROUP BY id) h ON h.id = k.id
+      LEFT JOIN (SELECT l.run_kit_id, SUM(c.ends_at - c.starts_at) AS quantity FROM run_lengths l JOIN cuts c ON c.id = l.cut_id GROUP BY l.run_kit_id) c ON c.run_kit_id = k.id
+     WHERE k.state <> 'broken-down'`,
   "bag and kit hold the notions that were packed": `
-    SELECT 'kit ' || k.serial, COALESCE((SELECT SUM(a.quantity) FROM at_place a WHERE a.place IN ('bag','kit') AND a.id = k.id AND a.item = 'notion'), 0),
-           COALESCE((SELECT SUM(p.count) FROM packed_notions p WHERE p.run_kit_id = k.id), 0)
-      FROM run_kits k WHERE k.state <> 'broken-down'`,
+    SELECT 'kit ' || k.serial, COALESCE(h.quantity, 0), COALESCE(p.quantity, 0) FROM run_kits k
+      LEFT JOIN (SELECT id, SUM(quantity) AS quantity FROM at_place WHERE place IN ('bag','kit') AND item = 'notion' GROUP BY id) h ON h.id = k.id
+      LEFT JOIN (SELECT run_kit_id, SUM(count) AS quantity FROM packed_notions GROUP BY run_kit_id) p ON p.run_kit_id = k.id
+     WHERE k.state <> 'broken-down'`,
   "nothing is left in the bag of a packed kit": `
     SELECT 'kit ' || k.serial, COALESCE(SUM(ABS(a.quantity)), 0), 0 FROM run_kits k
       JOIN at_place a ON a.place = 'bag' AND a.id = k.id WHERE k.state IN ('packed','sold') GROUP BY k.id`,
@@ -80,8 +83,9 @@ const CHECKS: Readonly<Record<string, string>> = {
   "tenders pay the sale": `
     SELECT 'receipt ' || s.receipt, COALESCE(SUM(t.amount), 0), s.total FROM sales s LEFT JOIN tenders t ON t.sale_id = s.id GROUP BY s.id`,
   "cash of a sale went into the drawer": `
-    SELECT 'receipt ' || s.receipt, COALESCE((SELECT SUM(m.amount) FROM cash_moves m WHERE m.sale_id = s.id AND m.kind = 'sale'), 0),
-           COALESCE((SELECT SUM(t.amount) FROM tenders t WHERE t.sale_id = s.id AND t.kind = 'cash'), 0) FROM sales s`,
+    SELECT 'receipt ' || s.receipt, COALESCE(m.amount, 0), COALESCE(t.amount, 0) FROM sales s
+      LEFT JOIN (SELECT sale_id, SUM(amount) AS amount FROM cash_moves WHERE kind = 'sale' GROUP BY sale_id) m ON m.sale_id = s.id
+      LEFT JOIN (SELECT sale_id, SUM(amount) AS amount FROM tenders WHERE kind = 'cash' GROUP BY sale_id) t ON t.sale_id = s.id`,
   "expected in the drawer equals its moves": `
     SELECT 'till session ' || t.id, t.expected, COALESCE(SUM(m.amount), 0) FROM till_sessions t LEFT JOIN cash_moves m ON m.till_session_id = t.id
      WHERE t.closed_at IS NOT NULL GROUP BY t.id`,
@@ -92,6 +96,6 @@ const QUERY = `WITH ${AT_PLACE} ${Object.entries(CHECKS)
   .join("\nUNION ALL\n")} ORDER BY 1, 2 LIMIT 500`;
 
 /** Compares every cached figure and every chain with the sums, in one query on one snapshot. No row when all is well; 500 at most. */
-export async function auditStock(): Promise<AuditRow[]> {
-  return db().sequelize.query<AuditRow>(QUERY, { type: QueryTypes.SELECT });
+export async function auditStock(transaction?: Transaction): Promise<AuditRow[]> {
+  return db().sequelize.query<AuditRow>(QUERY, { type: QueryTypes.SELECT, transaction: transaction ?? null });
 }

@@ -14,12 +14,19 @@ export interface Demand {
   readonly count: number;
 }
 
-/** Whether all demands fit between the flaws at once. A bolt that was never cut is straightened first, once. */
-export function clothHolds(cloth: Cloth, demands: readonly Demand[], straightening: number): boolean {
+/** For a figure that is only shown, so that a page of bolts with many flaws is never slow: it may then be too low, never too high. */
+const NODES_TO_SHOW = 2_000;
+
+/**
+ * Whether all demands fit between the flaws at once. A bolt that was never cut is straightened first, once.
+ *
+ * @param nodes the search's budget; the core's own when not said.
+ */
+export function clothHolds(cloth: Cloth, demands: readonly Demand[], straightening: number, nodes?: number): boolean {
   const wanted = demands.filter((demand) => demand.count > 0);
   if (wanted.length === 0) return true;
   const segments = segmentsLeft(cloth, cloth.cutEdge === 0 ? straightening : 0);
-  return fits(segments, wanted.map((demand) => ({ length: length(demand.length), count: demand.count }))).fits;
+  return fits(segments, wanted.map((demand) => ({ length: length(demand.length), count: demand.count })), nodes).fits;
 }
 
 /** How many of the demand fit beside those that are held already; 0 to its count. Adding one never makes the others fit again, so halving finds it. */
@@ -48,7 +55,7 @@ export function toSell(cloth: Cloth, held: readonly Demand[], straightening: num
   const promised = held.filter((demand) => demand.count > 0);
   const longest = longestPiece(cloth);
   if (promised.length === 0) return longest;
-  if (!clothHolds(cloth, promised, straightening)) return 0;
+  if (!clothHolds(cloth, promised, straightening, NODES_TO_SHOW)) return 0;
   if (cloth.flaws.every((flaw) => flaw.endsAt <= cloth.cutEdge || flaw.startsAt >= cloth.putUp)) {
     const start = cloth.cutEdge === 0 ? straightening : cloth.cutEdge;
     return cloth.putUp - start - promised.reduce((sum, demand) => sum + demand.length * demand.count, 0);
@@ -57,7 +64,7 @@ export function toSell(cloth: Cloth, held: readonly Demand[], straightening: num
   let not = longest + 1;
   while (not - fit > 1) {
     const middle = Math.floor((fit + not) / 2);
-    if (clothHolds(cloth, [...promised, { length: middle, count: 1 }], straightening)) fit = middle;
+    if (clothHolds(cloth, [...promised, { length: middle, count: 1 }], straightening, NODES_TO_SHOW)) fit = middle;
     else not = middle;
   }
   return fit;
