@@ -26,6 +26,8 @@ export interface PlanBolt {
 /** Every kit wants `length` of `fabric` once per entry, planned on `plannedWidth`. */
 export interface KitLength {
   readonly fabric: string;
+  /** What people call it; the fabric's number where nothing is said. */
+  readonly name?: string;
   readonly length: Length;
   readonly plannedWidth: Length;
 }
@@ -44,10 +46,11 @@ export interface PlannedCut {
   readonly bolt: string;
   readonly startsAt: Length;
   readonly endsAt: Length;
-  /** For a kit's length: its number from 1. For "waste" (straightening, cloth up to and with a flaw): null. */
+  /** For a kit's length: its number from 1; else null. */
   readonly kit: number | null;
   readonly fabric: string;
-  readonly purpose: "kit" | "waste";
+  /** Waste: straightening, a flaw and the scrap before it. Piece: a saleable rest before a flaw. */
+  readonly purpose: "kit" | "waste" | "piece";
 }
 
 /** Objective in this order: kits made, scrap under a saleable remnant, bolts touched. */
