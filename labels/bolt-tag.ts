@@ -1,5 +1,6 @@
+import type { MeasureSystem } from "../lib/core/measure/format";
 import type { Length } from "../lib/core/measure/length";
-import { rulerLength, type Measure } from "./press/lengths";
+import { rulerLength } from "./press/lengths";
 import { LABEL_SMALL, openPress, type Press } from "./press/press";
 import { drawLine, drawParagraph, fittingSize, textWidth } from "./press/type";
 import { drawTagCode, TAG_FLOOR, TAG_LEFT } from "./tag-code";
@@ -15,7 +16,7 @@ export interface BoltTagInput {
   readonly code: string;
   /** Small print beside the code, such as the date it was booked in; may be empty. */
   readonly remark: string;
-  readonly measure: Measure;
+  readonly measure: MeasureSystem;
 }
 
 export async function boltTagsPdf(tags: readonly BoltTagInput[]): Promise<Buffer> {

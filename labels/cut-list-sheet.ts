@@ -1,7 +1,8 @@
+import type { MeasureSystem } from "../lib/core/measure/format";
 import type { Length } from "../lib/core/measure/length";
 import { PER_METRE, PER_YARD } from "../lib/core/measure/length";
 import { drawHatch } from "./press/hatch";
-import { rulerLength, soldLength, type Measure } from "./press/lengths";
+import { rulerLength, soldLength } from "./press/lengths";
 import { openPress } from "./press/press";
 import { INK, numberPages, QUIET, ruleAcross, startSheet, type SheetFlow, type SheetPaper } from "./press/sheet-frame";
 import { drawLine, fittingSize, textWidth } from "./press/type";
@@ -37,7 +38,7 @@ export interface CutListInput {
   /** "1 December, for Thea Rusk" */
   readonly made: string;
   readonly bolts: readonly CutListBolt[];
-  readonly measure: Measure;
+  readonly measure: MeasureSystem;
   readonly paper: SheetPaper;
 }
 
@@ -81,7 +82,7 @@ function counted(count: number, one: string, many: string): string {
 }
 
 /** The scale shared by every tape on the page. */
-function drawAxis({ press, left, width }: SheetFlow, y: number, longest: number, measure: Measure): number {
+function drawAxis({ press, left, width }: SheetFlow, y: number, longest: number, measure: MeasureSystem): number {
   const unit = measure === "metres" ? PER_METRE : PER_YARD;
   const whole = Math.floor(longest / unit);
   const every = Math.max(1, Math.ceil(whole / 12));
@@ -96,7 +97,7 @@ function drawAxis({ press, left, width }: SheetFlow, y: number, longest: number,
   return y + 22;
 }
 
-function drawBolt(flow: SheetFlow, bolt: CutListBolt, longest: number, measure: Measure): void {
+function drawBolt(flow: SheetFlow, bolt: CutListBolt, longest: number, measure: MeasureSystem): void {
   flow.need(HEAD + ROW);
   drawBoltHead(flow, bolt, measure);
   drawTape(flow, bolt, longest);
@@ -108,7 +109,7 @@ function drawBolt(flow: SheetFlow, bolt: CutListBolt, longest: number, measure: 
   flow.y += 9;
 }
 
-function drawBoltHead(flow: SheetFlow, bolt: CutListBolt, measure: Measure): void {
+function drawBoltHead(flow: SheetFlow, bolt: CutListBolt, measure: MeasureSystem): void {
   const { press, left, right, width, y } = flow;
   const taken = bolt.cuts.reduce((sum, cut) => sum + cut.length, 0);
   const facts = `${soldLength(bolt.left, measure)} on it, leaves ${soldLength(Math.max(0, bolt.left - taken) as Length, measure)}`;
@@ -157,7 +158,7 @@ function drawTape({ press, left, width, y }: SheetFlow, bolt: CutListBolt, longe
   doc.rect(end - 2, y - 2, 2, TAPE + 4).fill(INK);
 }
 
-function drawFlaws(flow: SheetFlow, bolt: CutListBolt, measure: Measure): void {
+function drawFlaws(flow: SheetFlow, bolt: CutListBolt, measure: MeasureSystem): void {
   for (const flaw of bolt.flaws) {
     const said = `Flaw from ${soldLength(flaw.startsAt, measure)} to ${soldLength(flaw.endsAt, measure)} from today\u2019s cut edge: cut round it.`;
     drawLine(flow.press, said, { face: "bold", size: 9.5, colour: INK }, flow.left, flow.y + 9, { width: flow.width });
@@ -166,7 +167,7 @@ function drawFlaws(flow: SheetFlow, bolt: CutListBolt, measure: Measure): void {
 }
 
 /** A box to tick for every length, in cutting order, read along the rows. */
-function drawCuts(flow: SheetFlow, bolt: CutListBolt, measure: Measure): void {
+function drawCuts(flow: SheetFlow, bolt: CutListBolt, measure: MeasureSystem): void {
   const { press, left, width } = flow;
   const column = width / COLUMNS;
   bolt.cuts.forEach((cut, index) => {

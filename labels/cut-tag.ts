@@ -1,5 +1,6 @@
+import type { MeasureSystem } from "../lib/core/measure/format";
 import type { Length } from "../lib/core/measure/length";
-import { soldLength, type Measure } from "./press/lengths";
+import { soldLength } from "./press/lengths";
 import { LABEL_SMALL, openPress, type Press } from "./press/press";
 import { drawLine, fittingSize } from "./press/type";
 import { drawTagCode, TAG_FLOOR, TAG_LEFT } from "./tag-code";
@@ -12,7 +13,7 @@ export interface CutTagInput {
   /** Where it goes: "bag 3 of run 12", "put by for R. Amadi". */
   readonly goesTo: string;
   readonly code: string;
-  readonly measure: Measure;
+  readonly measure: MeasureSystem;
 }
 
 export async function cutTagsPdf(tags: readonly CutTagInput[]): Promise<Buffer> {

@@ -1,7 +1,8 @@
+import type { MeasureSystem } from "../lib/core/measure/format";
 import type { Length } from "../lib/core/measure/length";
 import { code128, DOT, drawSymbol, qr, toDots } from "./barcode";
 import { drawHatch, type Box, type Hatch } from "./press/hatch";
-import { rulerFigure, rulerUnit, soldFigure, type Measure } from "./press/lengths";
+import { rulerFigure, rulerUnit, soldFigure } from "./press/lengths";
 import { drawPicture, fitPicture, type Picture } from "./press/picture";
 import { LABEL_4X6, openPress, type Press } from "./press/press";
 import { drawLine, drawParagraph, fittingSize, paragraphHeight, textWidth, type Style, type Text } from "./press/type";
@@ -38,7 +39,7 @@ export interface KitLabelInput {
   /** Prints the small-parts caution. */
   readonly smallParts: boolean;
   readonly price: string | null;
-  readonly measure: Measure;
+  readonly measure: MeasureSystem;
 }
 
 const LEFT = 13;
@@ -194,7 +195,7 @@ function drawTape(press: Press, tape: Box, hatch: Hatch): void {
   doc.rect(tape.x + tape.width - 1.4, tape.y - 1, 1.4, tape.height + 2).fill("#000000");
 }
 
-function drawFigure(press: Press, value: Length, measure: Measure, size: number, baseline: number): number {
+function drawFigure(press: Press, value: Length, measure: MeasureSystem, size: number, baseline: number): number {
   const { figure, unit } = soldFigure(value, measure);
   const text: Text = [
     { text: figure, face: "bold" },

@@ -1,6 +1,7 @@
+import type { MeasureSystem } from "../lib/core/measure/format";
 import type { Length } from "../lib/core/measure/length";
 import { code128, DOT, drawSymbol, qr, toDots, type Symbol } from "./barcode";
-import { soldLength, type Measure } from "./press/lengths";
+import { soldLength } from "./press/lengths";
 import { openPress, RECEIPT_WIDTH, type Press } from "./press/press";
 import { drawLine, drawParagraph, paragraphHeight, textWidth, type Style } from "./press/type";
 
@@ -34,7 +35,7 @@ export interface ReceiptInput {
   /** Printed under the totals; the shop's default is `CUT_GOODS_RULE`. */
   readonly returnRule: string;
   readonly thanks: string;
-  readonly measure: Measure;
+  readonly measure: MeasureSystem;
 }
 
 export const CUT_GOODS_RULE = "Cut goods are not returned unless flawed.";

@@ -20,6 +20,7 @@ export interface PictureStyle {
   readonly as: "ink" | "colour";
   /** Points. */
   readonly lineWidth: number;
+  /** Points from line to line; 0 leaves the hatch out. */
   readonly hatchStep: number;
   readonly hatchWidth: number;
   readonly frameWidth: number;
@@ -42,7 +43,9 @@ export function drawPicture(press: Press, picture: Picture, box: Box, style: Pic
     groups.set(key, [...(groups.get(key) ?? []), polygon]);
   }
   doc.save();
-  doc.rect(box.x, box.y, box.width, box.height).clip();
+  // Room for half the outline, which lies on the picture's edge.
+  const edge = style.lineWidth / 2;
+  doc.rect(box.x - edge, box.y - edge, box.width + 2 * edge, box.height + 2 * edge).clip();
   for (const polygons of groups.values()) {
     const [first] = polygons;
     if (!first) continue;
@@ -54,7 +57,7 @@ export function drawPicture(press: Press, picture: Picture, box: Box, style: Pic
     }
     doc.clip();
     const colour = style.as === "ink" ? "#000000" : hatchColour(first.colour);
-    const hatch = style.as === "colour" && first.hatch === "solid" ? "blank" : first.hatch;
+    const hatch = style.hatchStep <= 0 || (style.as === "colour" && first.hatch === "solid") ? "blank" : first.hatch;
     drawHatch(press, hatch, box, { colour, lineWidth: style.hatchWidth, step: style.hatchStep });
     doc.restore();
   }
