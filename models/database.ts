@@ -1,5 +1,5 @@
 import pg from "pg";
-import { Sequelize } from "sequelize";
+import { Sequelize, type Options } from "sequelize";
 import { associateBlock, defineBlock } from "./block";
 import { associateBlockDraft, defineBlockDraft } from "./block-draft";
 import { associateBlockVersion, defineBlockVersion } from "./block-version";
@@ -147,12 +147,16 @@ export function db(): Database {
 
 /** Makes models of their own on another database; tests and scripts hand it to `useDb`. */
 export function makeDb(url: string, { pool = DEFAULT_POOL, acquireMs = ACQUIRE_MS }: { pool?: number; acquireMs?: number } = {}): Database {
-  const sequelize = new Sequelize(url, {
+  const options: Options & { keepDefaultTimezone: boolean } = {
     dialect: "postgres",
     dialectModule: pg,
     logging: false,
+    // No SET on connecting: behind a pooler in transaction mode a session's settings are somebody else's the next moment.
+    keepDefaultTimezone: true,
+    dialectOptions: { clientMinMessages: "ignore" },
     pool: { max: pool, min: 0, acquire: acquireMs, idle: 10_000 },
-  });
+  };
+  const sequelize = new Sequelize(url, options);
   const models = Object.fromEntries(Object.entries(DEFINITIONS).map(([name, define]) => [name, define(sequelize)])) as Models;
   for (const associate of ASSOCIATIONS) associate(models);
   return Object.assign(models, { sequelize });

@@ -29,7 +29,7 @@ const BY_KIND: Partial<Record<CodeKind, string>> = {
   cut: `SELECT 'cut' AS kind, l.id AS "runLengthId", k.serial, f.name AS title, r.code AS "runCode", l.state
           FROM run_lengths l JOIN run_kits k ON k.id = l.run_kit_id JOIN runs r ON r.id = l.run_id JOIN fabrics f ON f.id = l.fabric_id
          WHERE l.id = $2::bigint AND $1::text IS NOT NULL`,
-  receipt: `SELECT 'receipt' AS kind, s.id, s.receipt, p.name || ', ' || to_char(s.at, 'YYYY-MM-DD') AS title
+  receipt: `SELECT 'receipt' AS kind, s.id, s.receipt, p.name || ', ' || to_char(s.at AT TIME ZONE COALESCE((SELECT time_zone FROM shops), 'UTC'), 'YYYY-MM-DD') AS title
           FROM sales s JOIN people p ON p.id = s.person_id WHERE s.receipt = $1 AND $2::bigint IS NOT NULL`,
 };
 

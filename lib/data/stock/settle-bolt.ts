@@ -83,5 +83,6 @@ async function tellShort(transaction: Transaction, bolt: LockedBolt, promises: r
     });
     if (each.runCode) bumpRevision(`run:${each.runCode}`, transaction);
   }
+  if (short.length > 0) bumpRevision("runs", transaction);
   return short;
 }
