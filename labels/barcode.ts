@@ -41,25 +41,25 @@ export function code128(text: string, room: number, height: number): Symbol | nu
   const [symbol] = bwip.raw({ bcid: "code128", text });
   if (!symbol || !("sbs" in symbol)) throw new Error("Code 128 came without its bars");
   const modules = symbol.sbs.reduce((sum: number, width: number) => sum + width, 0);
-  for (let module = CODE_128_MODULE; module >= CODE_128_LEAST_MODULE; module -= 1) {
-    if ((modules + 2 * CODE_128_QUIET) * module > room) continue;
-    return { kind: "code-128", width: modules * module, height, quiet: CODE_128_QUIET * module, bars: barsOf(symbol.sbs, module) };
+  for (let dots = CODE_128_MODULE; dots >= CODE_128_LEAST_MODULE; dots -= 1) {
+    if ((modules + 2 * CODE_128_QUIET) * dots > room) continue;
+    return { kind: "code-128", width: modules * dots, height, quiet: CODE_128_QUIET * dots, bars: barsOf(symbol.sbs, dots) };
   }
   return null;
 }
 
-function barsOf(widths: readonly number[], module: number): [number, number, number, number][] {
+function barsOf(widths: readonly number[], dots: number): [number, number, number, number][] {
   const bars: [number, number, number, number][] = [];
   let at = 0;
   widths.forEach((width, i) => {
-    if (i % 2 === 0) bars.push([at * module, 0, width * module, 0]);
+    if (i % 2 === 0) bars.push([at * dots, 0, width * dots, 0]);
     at += width;
   });
   return bars;
 }
 
-/** QR code, error correction M, five dots a module; `module` may be made smaller where room is short. */
-export function qr(text: string, module = QR_MODULE): Symbol {
+/** QR code, error correction M, five dots a module; `dots` may be made smaller where room is short. */
+export function qr(text: string, dots = QR_MODULE): Symbol {
   const options = { bcid: "qrcode", text: utf8(text), eclevel: "M" };
   const [symbol] = bwip.raw(options);
   if (!symbol || !("pixs" in symbol)) throw new Error("The QR code came without its modules");
@@ -70,12 +70,12 @@ export function qr(text: string, module = QR_MODULE): Symbol {
     for (let x = 0; x <= side; x += 1) {
       if (x < side && symbol.pixs[y * side + x] === 1) run += 1;
       else if (run) {
-        bars.push([(x - run) * module, y * module, run * module, module]);
+        bars.push([(x - run) * dots, y * dots, run * dots, dots]);
         run = 0;
       }
     }
   }
-  return { kind: "qr", width: side * module, height: side * module, quiet: QR_QUIET * module, bars };
+  return { kind: "qr", width: side * dots, height: side * dots, quiet: QR_QUIET * dots, bars };
 }
 
 /** bwip-js takes one byte a character. */

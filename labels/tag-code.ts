@@ -31,7 +31,7 @@ export function drawTagCode(press: Press, code: string, remark = ""): number {
 function drawTagQr(press: Press, code: string): number {
   const room = toDots(LABEL_SMALL.height) - toDots(20);
   let symbol = qr(code, SMALL_QR_MODULE);
-  for (let module = SMALL_QR_MODULE - 1; module >= 1 && symbol.height + symbol.quiet > room; module -= 1) symbol = qr(code, module);
+  for (let dots = SMALL_QR_MODULE - 1; dots >= 1 && symbol.height + symbol.quiet > room; dots -= 1) symbol = qr(code, dots);
   const left = toDots(LABEL_SMALL.width) - symbol.quiet - symbol.width;
   drawSymbol(press, symbol, left, symbol.quiet);
   const size = Math.max(4.5, Math.min(8, (8 * TAG_WIDTH) / textWidth(press, code, { face: "strong", size: 8 })));
