@@ -1,9 +1,7 @@
-import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_INCH, PER_METRE, PER_MILLIMETRE, PER_YARD } from "@/lib/core/measure/length";
+import { displayLength, formatMetres, mixedNumber, wordsOfNumber, type MeasureSystem, type MixedNumber } from "@/lib/core/measure/format";
+import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_INCH, PER_METRE, PER_YARD } from "@/lib/core/measure/length";
 import type { Length } from "@/lib/core/measure/length";
-import { isMany, mixedNumber, sayMixedNumber, writeMixedNumber, type MixedNumber } from "./mixed-number";
-
-/** What a shop measures in. */
-export type MeasureSystem = "yards" | "metres";
+import { formatFigure, formatMoney } from "@/lib/core/money/money";
 
 interface FigureProps {
   readonly value: Length;
@@ -11,31 +9,34 @@ interface FigureProps {
   readonly bare?: boolean;
 }
 
-/** One mixed number: drawn as a fraction, said in words. */
+/** One mixed number: drawn with the fraction slash (U+2044), which the family's `frac` sets, and said in words. */
 export function Mixed({ figure }: { figure: MixedNumber }) {
-  const written = writeMixedNumber(figure);
-  const said = sayMixedNumber(figure);
-  if (written === said) return <span className="q">{written}</span>;
+  const whole = figure.whole.toLocaleString("en-US");
+  const sign = figure.negative ? "\u2212" : "";
+  if (figure.numerator === 0 && sign === "") return <span className="q">{whole}</span>;
+  const fraction = figure.numerator === 0 ? "" : `${figure.numerator}\u2044${figure.denominator}`;
+  const parts = figure.whole === 0 && fraction !== "" ? [fraction] : [whole, fraction].filter(Boolean);
   return (
     <span className="q">
-      <span aria-hidden="true">{written}</span>
-      <span className="sr">{said}</span>
+      <span aria-hidden="true">{sign + parts.join(" ")}</span>
+      <span className="sr">{wordsOfNumber(figure)}</span>
     </span>
   );
 }
 
 function Unit({ short, one, many, figure }: { short: string; one: string; many: string; figure: MixedNumber }) {
+  const single = figure.whole === 1 ? figure.numerator === 0 : figure.whole === 0 && figure.numerator > 0;
   return (
     <span className="u">
       <span aria-hidden="true">{short}</span>
-      <span className="sr"> {isMany(figure) ? many : one}</span>
+      <span className="sr"> {single ? one : many}</span>
     </span>
   );
 }
 
 /** Inches to the nearest 1/32, the finest mark that is stored. */
 export function Inches({ value, bare = false }: FigureProps) {
-  const figure = mixedNumber(value, PER_INCH, 32);
+  const figure = mixedNumber(value / PER_INCH, 32);
   return (
     <span className="whitespace-nowrap">
       <Mixed figure={figure} />
@@ -44,84 +45,76 @@ export function Inches({ value, bare = false }: FigureProps) {
   );
 }
 
-/** Yards in eighths. What lies beyond the last eighth is said in inches and never rounded away. */
+/** Yards as a fraction down to 1/32. A length off those marks is given in eighths and inches, never rounded away. */
 export function Yards({ value, bare = false }: FigureProps) {
+  const isOnAMark = Number.isInteger((value * 32) / PER_YARD);
   const eighths = Math.trunc(value / PER_EIGHTH_YARD);
-  const beyond = Math.abs(value - eighths * PER_EIGHTH_YARD);
-  const figure = mixedNumber(eighths * PER_EIGHTH_YARD, PER_YARD, 8);
-  const inches = mixedNumber(eighths === 0 ? value : beyond, PER_INCH, 32);
-  const isExact = inches.whole === 0 && inches.numerator === 0;
-  if (eighths === 0 && !isExact) return <Inches value={value} />;
+  if (!isOnAMark && eighths === 0) return <Inches value={value} />;
+  const figure = isOnAMark ? mixedNumber(value / PER_YARD, 32) : mixedNumber(eighths / 8, 8);
+  const beyond = mixedNumber(Math.abs(value - eighths * PER_EIGHTH_YARD) / PER_INCH, 32);
   return (
     <span className="whitespace-nowrap">
       <Mixed figure={figure} />
-      {bare && isExact ? null : <Unit short="yd" one="yard" many="yards" figure={figure} />}
-      {isExact ? null : (
+      {bare && isOnAMark ? null : <Unit short="yd" one="yard" many="yards" figure={figure} />}
+      {isOnAMark ? null : (
         <>
           {" "}
-          <Mixed figure={inches} />
-          <Unit short="in" one="inch" many="inches" figure={inches} />
+          <Mixed figure={beyond} />
+          <Unit short="in" one="inch" many="inches" figure={beyond} />
         </>
       )}
     </span>
   );
 }
 
-/** Metres and centimetres as a metric counter says them: "2 m 40", "85 cm", to the millimetre. */
-export function Metres({ value, bare = false }: FigureProps) {
-  const { written, said } = inMetres(value, bare);
+/** Metres and centimetres as a metric counter says them: "2 m 40", "85 cm". */
+export function Metres({ value }: { readonly value: Length }) {
   return (
     <span className="num whitespace-nowrap">
-      <span aria-hidden="true">{written}</span>
-      <span className="sr">{said}</span>
+      <span aria-hidden="true">{formatMetres(value).replace("-", "\u2212")}</span>
+      <span className="sr">{sayMetres(value)}</span>
     </span>
   );
 }
 
-export function inMetres(value: number, bare = false): { written: string; said: string } {
-  const millimetres = Math.round(Math.abs(value) / PER_MILLIMETRE);
-  const sign = value < 0 && millimetres > 0 ? "\u2212" : "";
-  const whole = Math.floor(millimetres / (PER_METRE / PER_MILLIMETRE));
-  const rest = (millimetres % (PER_METRE / PER_MILLIMETRE)) / (PER_CENTIMETRE / PER_MILLIMETRE);
-  const saidSign = sign === "" ? "" : "minus ";
+function sayMetres(value: number): string {
+  const centimetres = Number((Math.abs(value) / PER_CENTIMETRE).toFixed(1));
+  const whole = Math.floor(centimetres / (PER_METRE / PER_CENTIMETRE));
+  const rest = Number((centimetres - whole * 100).toFixed(1));
+  const sign = value < 0 && centimetres > 0 ? "minus " : "";
   const metres = `${whole} ${whole === 1 ? "metre" : "metres"}`;
-  if (rest === 0) return { written: `${sign}${whole}${bare ? "" : " m"}`, said: saidSign + metres };
-  if (whole === 0) return { written: `${sign}${rest} cm`, said: `${saidSign}${rest} centimetres` };
-  const two = Number.isInteger(rest) ? String(rest).padStart(2, "0") : `${rest} cm`;
-  return { written: `${sign}${whole} m ${two}`, said: `${saidSign}${metres} ${rest}` };
+  if (whole === 0) return `${sign}${rest} ${rest === 1 ? "centimetre" : "centimetres"}`;
+  return rest === 0 ? sign + metres : `${sign}${metres} ${rest}`;
 }
 
+type SystemFigureProps = FigureProps & { readonly system?: MeasureSystem };
+
 /** A length of cloth in the shop's own measure. */
-export function ClothLength({ value, system = "yards", bare = false }: FigureProps & { readonly system?: MeasureSystem }) {
-  return system === "metres" ? <Metres value={value} bare={bare} /> : <Yards value={value} bare={bare} />;
+export function ClothLength({ value, system = "yards", bare = false }: SystemFigureProps) {
+  return system === "metres" ? <Metres value={value} /> : <Yards value={value} bare={bare} />;
 }
 
 /** A cut size: inches, or centimetres in a metric shop. */
-export function CutSize({ value, system = "yards", bare = false }: FigureProps & { readonly system?: MeasureSystem }) {
-  return system === "metres" ? <Metres value={value} bare={bare} /> : <Inches value={value} bare={bare} />;
+export function CutSize({ value, system = "yards", bare = false }: SystemFigureProps) {
+  return system === "metres" ? <Metres value={value} /> : <Inches value={value} bare={bare} />;
 }
 
 interface MoneyProps {
   /** Minor units: cents, pence. */
   readonly minor: number;
-  /** ISO 4217. */
+  /** ISO 4217, one of those a shop can choose. */
   readonly currency: string;
+  readonly locale?: string;
   /** Leave the sign of the currency out where the head of the column says it. */
   readonly bare?: boolean;
 }
 
-export function Money({ minor, currency, bare = false }: MoneyProps) {
-  return <span className="num whitespace-nowrap">{writeMoney(minor, currency, bare)}</span>;
+export function Money({ minor, currency, locale = "en-US", bare = false }: MoneyProps) {
+  const written = bare ? formatFigure(minor, currency, locale) : formatMoney(minor, currency, locale);
+  return <span className="num whitespace-nowrap">{written.replace("-", "\u2212")}</span>;
 }
 
-/** The number of minor digits comes from the currency itself: two for USD, none for JPY. */
-export function writeMoney(minor: number, currency: string, bare = false): string {
-  const format = new Intl.NumberFormat("en-US", { style: "currency", currency, currencyDisplay: "narrowSymbol" });
-  const digits = format.resolvedOptions().maximumFractionDigits ?? 2;
-  const parts = format.formatToParts(minor / 10 ** digits);
-  return parts
-    .filter((part) => !(bare && part.type === "currency"))
-    .map((part) => (part.type === "minusSign" ? "\u2212" : part.value))
-    .join("")
-    .trim();
+/** A length inside a sentence that is plain text: an aria-label, a title. */
+export function lengthInText(value: Length, system: MeasureSystem = "yards"): string {
+  return displayLength(value, system);
 }
