@@ -3,58 +3,98 @@ import type { StripGroup } from "./strip-layout";
 import type { Relaxation, StripMaster } from "./strip-master";
 import type { StripSearch } from "./strip-search";
 
-/** Columns given to the integer programme at most: beyond that its nodes become too slow to be worth it. */
-const MOST_COLUMNS = 6000;
+/** Strips listed at most; listing more costs more than it brings. */
+const MOST_LISTED = 20_000;
+/** Strips given to an integer programme that is to find a shorter layout: few, so that its nodes are quick. */
+const COLUMNS_TO_FIND = 400;
+/** Strips given to the one that is to prove there is none. */
+const COLUMNS_TO_PROVE = 3000;
+/** Simplex iterations times columns that cost as much as a node of the budget. */
+const WORK_OF_A_NODE = 8000;
+
+interface Listed extends StripPattern {
+  readonly reducedCost: number;
+}
 
 /**
  * The integer finish. A shorter layout can only use strips whose reduced cost is below what still separates the best
- * layout from the relaxation, so when those can be listed, the integer programme over them either finds a shorter
- * layout or proves that there is none. When there are too many, the cheapest are taken and nothing is proved.
+ * layout from the relaxation (reduced-cost fixing), so an integer programme over all of those either finds a shorter
+ * layout or proves that there is none. First the cheapest are tried for as long as that shortens the layout, which
+ * leaves fewer that matter; then more.
  */
 export async function settleByInteger(search: StripSearch, master: StripMaster, relaxation: Relaxation): Promise<void> {
+  const gapTo = (length: number) => length - 1 - relaxation.bound;
+  let { listed, upTo } = listStrips(search, relaxation, gapTo(search.best.length));
+  for (;;) {
+    if (search.settled || search.meter.spent) return;
+    const gap = gapTo(search.best.length);
+    listed = listed.filter((each) => each.reducedCost <= gap + 1e-6);
+    if (upTo < gap && listed.length < COLUMNS_TO_FIND / 2) ({ listed, upTo } = listStrips(search, relaxation, gap));
+    const before = search.best.length;
+    // A plan that uses a strip left out costs at least so much; where none that matters is left out, it is no shorter.
+    const without = (count: number) => (listed.length <= count && upTo >= gap ? before : relaxation.bound + (listed[count]?.reducedCost ?? upTo));
+    await solveOver(search, master, listed.slice(0, COLUMNS_TO_FIND), without(COLUMNS_TO_FIND));
+    if (search.best.length < before) continue;
+    if (search.settled || listed.length <= COLUMNS_TO_FIND || search.meter.spent) return;
+    await solveOver(search, master, listed.slice(0, COLUMNS_TO_PROVE), without(COLUMNS_TO_PROVE));
+    if (search.best.length === before) return;
+  }
+}
+
+/** Solves over the strips given. A plan costs no less than what that proves, or it uses another strip and costs no less than `otherwise`. */
+async function solveOver(search: StripSearch, master: StripMaster, listed: readonly StripPattern[], otherwise: number): Promise<void> {
   const { problem, meter } = search;
   const demand = problem.kinds.map((kind) => kind.demand);
-  // Every length is whole in along units: what is looked for is shorter by one at least.
-  const gap = search.best.length - 1 - relaxation.bound;
-  const all = listPatterns(search, relaxation, demand, gap);
-  const patterns = merge(master, problem.heights, relaxation, all ?? [], gap, search.best.groups);
-  meter.patterns += Math.max(0, patterns.length - master.pool.length);
-  const rows = [
-    ...demand.map((lower) => ({ lower, upper: Infinity })),
-    ...master.required.map((lower) => ({ lower, upper: Infinity })),
-  ];
-  const columns = patterns.map((pattern) => ({ cost: problem.heights[pattern.height] ?? 0, ...master.entries(pattern), lower: 0, upper: mostTimes(pattern, demand) }));
+  const patterns = withStart(listed, search.best.groups);
+  const start = patterns.map((pattern) => search.best.groups.find((group) => nameOf(group) === nameOf(pattern))?.times ?? 0);
   const answer = await search.solver.solveInteger({
-    rows,
-    columns,
-    start: patterns.map((pattern) => search.best.groups.find((group) => nameOf(group) === nameOf(pattern))?.times ?? 0),
+    rows: [...demand, ...master.required].map((lower) => ({ lower, upper: Infinity })),
+    columns: patterns.map((pattern) => ({ cost: problem.heights[pattern.height] ?? 0, ...master.entries(pattern), lower: 0, upper: mostTimes(pattern, demand) })),
+    start,
     nodes: meter.nodesLeft,
+    iterations: Math.ceil((meter.nodesLeft * WORK_OF_A_NODE) / (patterns.length + 100)),
     gap: 0.999,
     stopped: () => meter.stopped,
   });
-  meter.nodes += answer.nodes;
+  meter.nodes += Math.max(answer.nodes, Math.ceil((answer.iterations * (patterns.length + 100)) / WORK_OF_A_NODE));
   meter.programmes += 1;
-  const before = search.best.length;
-  if (answer.values) {
-    const { values } = answer;
+  const { values } = answer;
+  if (values) {
     search.offer(patterns.flatMap((pattern, index): StripGroup[] => {
       const times = Math.round(values[index] ?? 0);
       return times > 0 ? [{ ...pattern, times }] : [];
     }));
   }
-  if (all) search.raise(Math.min(before, answer.status === "infeasible" ? before : Math.ceil(answer.bound - 1e-6)));
+  search.raise(Math.min(answer.bound, otherwise));
+  await meter.pause();
 }
 
-/** All strips that a layout shorter by one can use; null when there are too many. */
-function listPatterns(search: StripSearch, relaxation: Relaxation, demand: readonly number[], gap: number): StripPattern[] | null {
-  const patterns: StripPattern[] = [];
-  for (let height = 0; height < search.problem.heights.length; height++) {
-    const least = (relaxation.stripCosts[height] ?? 0) - gap - 1e-6;
-    const found = search.filler.fillings(height, relaxation.prices, demand, least, MOST_COLUMNS - patterns.length);
-    if (!found) return null;
-    for (const counts of found) if (usesHeight(search, height, counts)) patterns.push({ height, counts });
+/** Strips by reduced cost, cheapest first, complete up to the gap returned: less than asked for where there are too many. */
+function listStrips(search: StripSearch, relaxation: Relaxation, gap: number): { listed: Listed[]; upTo: number } {
+  for (let upTo = gap; upTo > 1e-3; upTo /= 2) {
+    const listed = listUpTo(search, relaxation, upTo);
+    if (!listed) continue;
+    search.meter.patterns += listed.length;
+    return { listed: listed.sort((a, b) => a.reducedCost - b.reducedCost || a.height - b.height), upTo };
   }
-  return patterns;
+  return { listed: [], upTo: 0 };
+}
+
+function listUpTo(search: StripSearch, relaxation: Relaxation, gap: number): Listed[] | null {
+  const { problem, filler } = search;
+  const demand = problem.kinds.map((kind) => kind.demand);
+  const listed: Listed[] = [];
+  for (let height = 0; height < problem.heights.length; height++) {
+    const cost = relaxation.stripCosts[height] ?? 0;
+    const found = filler.fillings(height, relaxation.prices, demand, cost - gap - 1e-6, MOST_LISTED - listed.length);
+    if (!found) return null;
+    for (const counts of found) {
+      if (!usesHeight(search, height, counts)) continue;
+      const worth = counts.reduce((total, count, kind) => total + count * (relaxation.prices[kind] ?? 0), 0);
+      listed.push({ height, counts, reducedCost: cost - worth });
+    }
+  }
+  return listed;
 }
 
 /** A strip whose pieces all lie in a narrower one is never needed. */
@@ -71,15 +111,9 @@ function usesHeight(search: StripSearch, height: number, counts: readonly number
   return taken > width;
 }
 
-/** The pool's own strips of small reduced cost and those of the best layout join the listed ones; each once. */
-function merge(master: StripMaster, heights: readonly number[], relaxation: Relaxation, listed: readonly StripPattern[], gap: number, best: readonly StripGroup[]): StripPattern[] {
-  const known = new Map<string, StripPattern>();
-  for (const pattern of listed) known.set(nameOf(pattern), pattern);
-  for (const pattern of master.pool) {
-    const worth = pattern.counts.reduce((total, count, kind) => total + count * (relaxation.prices[kind] ?? 0), 0);
-    if ((relaxation.stripCosts[pattern.height] ?? 0) - worth <= Math.max(gap, 0.02 * (heights[pattern.height] ?? 0))) known.set(nameOf(pattern), pattern);
-  }
-  // The best layout is the search's start, so its strips must be there.
+/** The best layout is the search's start, so its strips must be there. */
+function withStart(listed: readonly StripPattern[], best: readonly StripGroup[]): StripPattern[] {
+  const known = new Map(listed.map((pattern) => [nameOf(pattern), pattern]));
   for (const group of best) known.set(nameOf(group), { height: group.height, counts: group.counts });
   return [...known.values()];
 }

@@ -44,6 +44,8 @@ export interface IntegerQuestion {
   readonly start?: readonly number[];
   /** Nodes of the search, at most. Work, never seconds. */
   readonly nodes: number;
+  /** Simplex iterations of the search, at most; looked at between its steps, so it may run over by one of them. */
+  readonly iterations?: number;
   /** Stop when answer and bound are no further apart than this, in units of cost. */
   readonly gap: number;
   /** Asked now and then during the search. */
@@ -58,6 +60,7 @@ export interface IntegerAnswer {
   readonly bound: number;
   readonly values: Float64Array | null;
   readonly nodes: number;
+  readonly iterations: number;
 }
 
 /** The solver of linear and integer programmes, passed in so that the core imports none. */
