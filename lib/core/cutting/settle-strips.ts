@@ -9,6 +9,8 @@ const MOST_LISTED = 20_000;
 const COLUMNS_TO_FIND = 400;
 /** Strips given to the one that is to prove there is none. */
 const COLUMNS_TO_PROVE = 3000;
+/** How often the gap is halved before the listing is given up. */
+const MOST_HALVINGS = 12;
 /** Simplex iterations times columns that cost as much as a node of the budget. */
 const WORK_OF_A_NODE = 8000;
 
@@ -23,7 +25,7 @@ interface Listed extends StripPattern {
  * leaves fewer that matter; then more.
  */
 export async function settleByInteger(search: StripSearch, master: StripMaster, relaxation: Relaxation): Promise<void> {
-  const gapTo = (length: number) => length - 1 - relaxation.bound;
+  const gapTo = (length: number) => Math.max(0, length - 1 - relaxation.bound);
   let { listed, upTo } = listStrips(search, relaxation, gapTo(search.best.length));
   for (;;) {
     if (search.settled || search.meter.spent) return;
@@ -71,7 +73,8 @@ async function solveOver(search: StripSearch, master: StripMaster, listed: reado
 
 /** Strips by reduced cost, cheapest first, complete up to the gap returned: less than asked for where there are too many. */
 function listStrips(search: StripSearch, relaxation: Relaxation, gap: number): { listed: Listed[]; upTo: number } {
-  for (let upTo = gap; upTo > 1e-3; upTo /= 2) {
+  let upTo = gap;
+  for (let halved = 0; halved < MOST_HALVINGS; halved++, upTo /= 2) {
     const listed = listUpTo(search, relaxation, upTo);
     if (!listed) continue;
     search.meter.patterns += listed.length;
