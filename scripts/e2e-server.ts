@@ -40,8 +40,9 @@ async function serve(port: number): Promise<void> {
   if (!fs.existsSync(path.join(ROOT, process.env.NEXT_DIST_DIR || ".next", "BUILD_ID"))) throw new PlainFault("There is no build to serve. Run npm run build first.");
   const url = await freshShop();
   const mail = path.join(ROOT, ".ellwand", `e2e-mail-${process.pid}`);
+  undo.push(async () => fs.rmSync(mail, { recursive: true, force: true }));
   const sink = await startMailSink(ROOT, mail);
-  undo.push(async () => fs.rmSync(mail, { recursive: true, force: true }), () => stopChild(sink.child));
+  undo.push(() => stopChild(sink.child));
   const pages = await startPages(ROOT, {
     port,
     dev: false,

@@ -38,7 +38,8 @@ await runCommand(async () => {
   server.on("error", (error) => console.error("The local mail server:", error.message));
   server.listen(0, "127.0.0.1", () => {
     const address = server.server.address();
-    if (address && typeof address === "object") console.log(address.port);
+    // Not console.log: it colours numbers where a terminal is promised.
+    if (address && typeof address === "object") process.stdout.write(`${address.port}\n`);
   });
   process.once("SIGTERM", () => server.close(() => process.exit(0)));
   process.once("SIGINT", () => server.close(() => process.exit(0)));

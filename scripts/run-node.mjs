@@ -1,4 +1,8 @@
 import { spawn } from "node:child_process";
+import { onParentGone, startedByNpm } from "./parent-gone.mjs";
+
+/** @type {Set<import("node:child_process").ChildProcess>} */
+const running = new Set();
 
 /**
  * Runs a Node.js program to its end and shows what it prints.
@@ -8,7 +12,13 @@ import { spawn } from "node:child_process";
 export function runNode(args, { cwd, env = process.env }) {
   return new Promise((resolve, reject) => {
     const child = spawn(process.execPath, args, { cwd, env, stdio: ["ignore", "inherit", "inherit"] });
+    running.add(child);
     child.once("error", reject);
-    child.once("exit", (code) => resolve(code ?? 1));
+    child.once("exit", (code) => {
+      running.delete(child);
+      resolve(code ?? 1);
+    });
   });
 }
+
+if (startedByNpm) onParentGone(() => running.forEach((child) => child.kill("SIGTERM")));

@@ -6,6 +6,7 @@ import fs from "node:fs";
 import path from "node:path";
 import { fileURLToPath } from "node:url";
 import { checkNode, ensurePackages } from "./packages.mjs";
+import { onParentGone, startedByNpm } from "./parent-gone.mjs";
 import { PlainFault, runCommand } from "./plain-fault.mjs";
 import { DEMO_CLUSTER, ensurePostgres, freePort, removePostgres } from "./postgres.mjs";
 import { runNode } from "./run-node.mjs";
@@ -84,7 +85,7 @@ async function bringUpDatabase(options, undo) {
 /** @param {string} file @param {Record<string, string>} env */
 async function script(file, env) {
   const code = await runNode(["--import", "tsx", path.join(ROOT, file)], { cwd: ROOT, env: { ...process.env, ...env } });
-  if (code !== 0) throw new PlainFault("The database could not be made ready: the reason stands above.");
+  if (code !== 0) throw new PlainFault("Ellwand was not started.");
 }
 
 /** @param {Undo} undo @returns {Promise<Record<string, string>>} */
@@ -168,6 +169,7 @@ await runCommand(async () => {
   /** @type {Undo} */
   const undo = [];
   for (const signal of /** @type {const} */ (["SIGINT", "SIGTERM", "SIGHUP"])) process.on(signal, () => void stop(undo, 0));
+  if (startedByNpm) onParentGone(() => void stop(undo, 0));
   try {
     await start(options, undo);
   } catch (error) {
