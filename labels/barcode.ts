@@ -15,7 +15,7 @@ const CODE_128_QUIET = 10;
 const QR_QUIET = 4;
 
 /** A symbol measured in whole printer dots, quiet zone not counted. */
-export interface Symbol {
+export interface BarSymbol {
   readonly kind: "code-128" | "qr";
   readonly width: number;
   readonly height: number;
@@ -36,7 +36,7 @@ export function toDots(points: number): number {
  * @param room dots, quiet zones included.
  * @param height dots.
  */
-export function code128(text: string, room: number, height: number): Symbol | null {
+export function code128(text: string, room: number, height: number): BarSymbol | null {
   if (!/^[\x20-\x7e]+$/.test(text)) return null;
   const [symbol] = bwip.raw({ bcid: "code128", text });
   if (!symbol || !("sbs" in symbol)) throw new Error("Code 128 came without its bars");
@@ -59,7 +59,21 @@ function barsOf(widths: readonly number[], dots: number): [number, number, numbe
 }
 
 /** QR code, error correction M, five dots a module; `dots` may be made smaller where room is short. */
-export function qr(text: string, dots = QR_MODULE): Symbol {
+export function qr(text: string, dots = QR_MODULE): BarSymbol {
+  const key = `${dots} ${text}`;
+  const known = lastCodes.get(key);
+  if (known) return known;
+  const symbol = makeQr(text, dots);
+  if (lastCodes.size >= KEPT_CODES) lastCodes.clear();
+  lastCodes.set(key, symbol);
+  return symbol;
+}
+
+/** Working out a QR code takes longer than setting the rest of a label, and the labels of a run often share one. */
+const lastCodes = new Map<string, BarSymbol>();
+const KEPT_CODES = 64;
+
+function makeQr(text: string, dots: number): BarSymbol {
   const options = { bcid: "qrcode", text: utf8(text), eclevel: "M" };
   const [symbol] = bwip.raw(options);
   if (!symbol || !("pixs" in symbol)) throw new Error("The QR code came without its modules");
@@ -84,7 +98,7 @@ function utf8(text: string): string {
 }
 
 /** Draws a symbol with its top left corner on the dot grid; `left` and `top` in dots, quiet zone outside them. */
-export function drawSymbol({ doc }: Press, symbol: Symbol, left: number, top: number): void {
+export function drawSymbol({ doc }: Press, symbol: BarSymbol, left: number, top: number): void {
   for (const [x, y, width, height] of symbol.bars) {
     doc.rect((left + x) * DOT, (top + y) * DOT, width * DOT, (height || symbol.height) * DOT);
   }

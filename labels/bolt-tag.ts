@@ -1,5 +1,5 @@
-import type { MeasureSystem } from "../lib/core/measure/format";
-import type { Length } from "../lib/core/measure/length";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
 import { rulerLength } from "./press/lengths";
 import { LABEL_SMALL, openPress, type Press } from "./press/press";
 import { drawLine, drawParagraph, fittingSize, textWidth } from "./press/type";

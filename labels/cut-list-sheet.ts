@@ -1,6 +1,6 @@
-import type { MeasureSystem } from "../lib/core/measure/format";
-import type { Length } from "../lib/core/measure/length";
-import { PER_METRE, PER_YARD } from "../lib/core/measure/length";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
+import { PER_METRE, PER_YARD } from "@/lib/core/measure/length";
 import { drawHatch } from "./press/hatch";
 import { rulerLength, soldLength } from "./press/lengths";
 import { openPress } from "./press/press";

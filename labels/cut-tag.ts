@@ -1,5 +1,5 @@
-import type { MeasureSystem } from "../lib/core/measure/format";
-import type { Length } from "../lib/core/measure/length";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
 import { soldLength } from "./press/lengths";
 import { LABEL_SMALL, openPress, type Press } from "./press/press";
 import { drawLine, fittingSize } from "./press/type";
@@ -27,7 +27,8 @@ export function drawCutTag(press: Press, tag: CutTagInput): void {
   press.startPage(LABEL_SMALL);
   const width = drawTagCode(press, tag.code) - TAG_LEFT;
   const said = soldLength(tag.length, tag.measure);
-  const length = drawLine(press, said, { face: "bold", size: 18 }, TAG_LEFT, 21);
+  const figure = { face: "bold", size: 18 } as const;
+  const length = drawLine(press, said, { ...figure, size: fittingSize(press, said, figure, width * 0.6, 1, 11) }, TAG_LEFT, 21);
   drawLine(press, tag.goesTo, { face: "strong", size: 9.5 }, TAG_LEFT + width, 20, { align: "right", width: width - length - 8 });
   const style = { face: "word-strong", size: 13 } as const;
   const size = fittingSize(press, tag.fabricName, style, width, 1, 9);

@@ -1,5 +1,5 @@
-import type { MeasureSystem } from "../lib/core/measure/format";
-import type { Length } from "../lib/core/measure/length";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
 import { code128, DOT, drawSymbol, qr, toDots } from "./barcode";
 import { drawHatch, type Box, type Hatch } from "./press/hatch";
 import { rulerFigure, rulerUnit, soldFigure } from "./press/lengths";
@@ -77,9 +77,10 @@ function rule({ doc }: Press, y: number, thickness: number): void {
 /** Shop, kit and colourway; returns the foot of what was written. */
 function drawHead(press: Press, label: KitLabelInput): number {
   const line: Style = { face: "strong", size: 9.6 };
-  const noteWidth = Math.min(textWidth(press, label.note, line), WIDTH * 0.45);
-  drawLine(press, label.note, line, RIGHT, 18, { align: "right", width: WIDTH * 0.45 });
-  drawLine(press, label.shopName, line, LEFT, 18, { width: WIDTH - noteWidth - (noteWidth ? 12 : 0) });
+  const noteWidth = drawLine(press, label.note, line, RIGHT, 18, { align: "right", width: WIDTH * 0.4 });
+  const shopWidth = WIDTH - noteWidth - (noteWidth ? 12 : 0);
+  const shopSize = fittingSize(press, label.shopName, line, shopWidth, 1, 7);
+  drawLine(press, label.shopName, { ...line, size: shopSize }, LEFT, 18, { width: shopWidth });
   rule(press, 23, 2.4);
   const style: Style = { face: "word-strong", size: 36 };
   let size = fittingSize(press, label.kitName, style, WIDTH, 1, 22);
@@ -87,7 +88,8 @@ function drawHead(press: Press, label: KitLabelInput): number {
   if (!oneLine) size = fittingSize(press, label.kitName, { ...style, size: 22 }, WIDTH, 2, 13);
   const foot = drawParagraph(press, label.kitName, { ...style, size }, LEFT, 28, { width: WIDTH, maxLines: oneLine ? 1 : 2, leading: 1.1 });
   if (!label.colourway) return foot;
-  drawLine(press, label.colourway, { face: "word-strong", size: 15 }, LEFT, foot + 14, { width: WIDTH });
+  const colourway: Style = { face: "word-strong", size: 15 };
+  drawLine(press, label.colourway, { ...colourway, size: fittingSize(press, label.colourway, colourway, WIDTH, 1, 10) }, LEFT, foot + 14, { width: WIDTH });
   return foot + 19;
 }
 

@@ -1,6 +1,6 @@
-import type { MeasureSystem } from "../lib/core/measure/format";
-import type { Length } from "../lib/core/measure/length";
-import { code128, DOT, drawSymbol, qr, toDots, type Symbol } from "./barcode";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
+import { code128, DOT, drawSymbol, qr, toDots, type BarSymbol } from "./barcode";
 import { soldLength } from "./press/lengths";
 import { openPress, RECEIPT_WIDTH, type Press } from "./press/press";
 import { drawLine, drawParagraph, paragraphHeight, textWidth, type Style } from "./press/type";
@@ -149,7 +149,7 @@ function footParts(press: Press, receipt: ReceiptInput): Part[] {
   ];
 }
 
-function symbolPart(press: Press, symbol: Symbol): Part {
+function symbolPart(press: Press, symbol: BarSymbol): Part {
   const left = Math.round((toDots(RECEIPT_WIDTH) - symbol.width) / 2);
   return { height: symbol.height * DOT + 4, draw: (top) => drawSymbol(press, symbol, left, toDots(top)) };
 }

@@ -1,5 +1,5 @@
-import { displayInches, displayYards, formatCentimetres, formatExactInches, formatMetres, type MeasureSystem } from "../../lib/core/measure/format";
-import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_YARD, type Length } from "../../lib/core/measure/length";
+import { displayInches, displayYards, formatCentimetres, formatExactInches, formatMetres, type MeasureSystem } from "@/lib/core/measure/format";
+import { PER_CENTIMETRE, PER_EIGHTH_YARD, PER_YARD, type Length } from "@/lib/core/measure/length";
 
 /** A figure is never parted from its unit at the end of a line. */
 const NO_BREAK = "\u00a0";

@@ -48,9 +48,20 @@ function figureFace(face: Face): Face {
   return face === "word-strong" ? "strong" : face;
 }
 
-function runWidth({ doc }: Press, run: Run, size: number): number {
-  doc.font(run.face).fontSize(size);
-  return run.fraction ? doc.widthOfString(run.text, { features: FRACTION_FEATURES }) : doc.widthOfString(run.text);
+/** Widths at one point, by document: the same words are measured again for every label and every size tried. */
+const widths = new WeakMap<Press, Map<string, number>>();
+
+function runWidth(press: Press, run: Run, size: number): number {
+  let known = widths.get(press);
+  if (!known) widths.set(press, (known = new Map()));
+  const key = `${run.face}${run.fraction ? "/" : ":"}${run.text}`;
+  let width = known.get(key);
+  if (width === undefined) {
+    const doc = press.doc.font(run.face).fontSize(1);
+    width = run.fraction ? doc.widthOfString(run.text, { features: FRACTION_FEATURES }) : doc.widthOfString(run.text);
+    known.set(key, width);
+  }
+  return width * size;
 }
 
 /** Width in points. */
@@ -232,6 +243,7 @@ function shorten(press: Press, runs: readonly Run[], style: Style, width: number
   let used = 0;
   for (const run of merge(runs)) {
     const ellipsis = runWidth(press, { ...run, fraction: false, text: ELLIPSIS }, style.size);
+    if (ellipsis > width) return [];
     for (const letter of run.fraction ? [run.text] : [...run.text]) {
       const step = runWidth(press, { ...run, text: letter }, style.size);
       if (used + step + ellipsis > width) {

@@ -1,6 +1,6 @@
-import type { MeasureSystem } from "../../lib/core/measure/format";
-import type { Length } from "../../lib/core/measure/length";
-import type { Blank, StripPlan, SubCut } from "../../lib/core/piece/strip-plan";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
+import type { Blank, StripPlan, SubCut } from "@/lib/core/piece/strip-plan";
 import { drawHatch } from "../press/hatch";
 import { rulerLength, soldLength } from "../press/lengths";
 import type { Press } from "../press/press";

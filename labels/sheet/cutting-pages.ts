@@ -1,4 +1,4 @@
-import type { CutPiece } from "../../lib/core/piece/cut-piece";
+import type { CutPiece } from "@/lib/core/piece/cut-piece";
 import { rulerLength } from "../press/lengths";
 import { INK, QUIET, ruleAcross, type SheetFlow } from "../press/sheet-frame";
 import { drawLine, drawParagraph, paragraphHeight, type Style } from "../press/type";

@@ -85,7 +85,7 @@ function drawFabricRow(flow: SheetFlow, fabric: SheetFabric, sheet: InstructionS
 }
 
 export function amountWords(fabric: SheetFabric, sheet: InstructionSheetInput): string {
-  if (sheet.kind === "pre-cut") return "cut";
+  if (sheet.kind === "pre-cut") return "cut to size";
   if (fabric.fits === "fat-quarter") return "1 fat quarter";
   if (fabric.fits === "fat-eighth") return "1 fat eighth";
   return soldLength(fabric.length, sheet.measure);

@@ -1,5 +1,5 @@
-import type { MeasureSystem } from "../../lib/core/measure/format";
-import type { CutMethod, CutPiece, CutSize } from "../../lib/core/piece/cut-piece";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { CutMethod, CutPiece, CutSize } from "@/lib/core/piece/cut-piece";
 import { exactLength, rulerFigure, rulerLength, soldLength } from "../press/lengths";
 
 /** "12 squares, 3 1/2 in": so many of the rectangles that a piece comes out of. */

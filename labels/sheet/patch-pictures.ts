@@ -1,6 +1,6 @@
-import type { MeasureSystem } from "../../lib/core/measure/format";
-import type { CutPiece } from "../../lib/core/piece/cut-piece";
-import type { Polygon } from "../../lib/core/piece/patch";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { CutPiece } from "@/lib/core/piece/cut-piece";
+import type { Polygon } from "@/lib/core/piece/patch";
 import { INK } from "../press/sheet-frame";
 import type { Press } from "../press/press";
 import { drawLine, drawParagraph } from "../press/type";

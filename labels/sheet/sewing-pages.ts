@@ -1,4 +1,4 @@
-import { plus, times, type Length } from "../../lib/core/measure/length";
+import { plus, times, type Length } from "@/lib/core/measure/length";
 import { rulerFigure, rulerLength } from "../press/lengths";
 import { INK, QUIET, ruleAcross, type SheetFlow } from "../press/sheet-frame";
 import { drawLine, drawParagraph, paragraphHeight, type Style } from "../press/type";

@@ -1,7 +1,7 @@
-import type { MeasureSystem } from "../../lib/core/measure/format";
-import type { Length } from "../../lib/core/measure/length";
-import type { CutPiece } from "../../lib/core/piece/cut-piece";
-import type { Blank, StripPlan } from "../../lib/core/piece/strip-plan";
+import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
+import type { CutPiece } from "@/lib/core/piece/cut-piece";
+import type { Blank, StripPlan } from "@/lib/core/piece/strip-plan";
 import type { Hatch } from "../press/hatch";
 import type { Picture } from "../press/picture";
 import type { SheetPaper } from "../press/sheet-frame";

@@ -1,5 +1,5 @@
-import type { Length } from "../../lib/core/measure/length";
-import type { Blank, Strip, StripPlan } from "../../lib/core/piece/strip-plan";
+import type { Length } from "@/lib/core/measure/length";
+import type { Blank, Strip, StripPlan } from "@/lib/core/piece/strip-plan";
 
 /** Strips of one width that are sub-cut alike. */
 export interface StripGroup {
