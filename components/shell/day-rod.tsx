@@ -99,10 +99,16 @@ function Rod({ hours, now }: { hours: DayHours; now: Minute | null }) {
 
 function Sheet({ hours, now, tasks }: { hours: DayHours; now: Minute | null; tasks: readonly DayTask[] }) {
   const slots = Math.max(1, Math.round((hours.to - hours.from) / 15));
+  const placed = placeTasks(tasks, hours);
   return (
     <section aria-label="What falls due today" className="day-sheet" style={{ "--slots": slots } as CSSProperties}>
       {now === null || now < hours.from || now > hours.to ? null : <div className="day-now-line" aria-hidden="true" style={{ left: share(now, hours) }} />}
-      {placeTasks(tasks, hours).map(({ task, row, column, span, leftward }) => (
+      {placed
+        .filter(({ row }) => row > 0)
+        .map(({ task }) => (
+          <span key={task.id} className="day-stub" aria-hidden="true" style={{ left: share(task.at, hours) }} />
+        ))}
+      {placed.map(({ task, row, column, span, leftward }) => (
         <article key={task.id} className={leftward ? "day-task day-task-left" : "day-task"} style={{ gridRow: row + 1, gridColumn: `${column + 1} / span ${span}` }}>
           <h2>
             <time>{task.when}</time>

@@ -31,8 +31,10 @@ export function sectionsFor(person: Pick<Actor, "roles">, sections: readonly Sec
   return sections.filter((section) => can(person, section.permission));
 }
 
-/** The section a path lies in: the longest address that it begins with, so that Today does not claim every room. */
+/** Today stands at the address that all rooms begin with, so it is current only on its own page. */
+const TODAY = "/staff";
+
+/** The section a path lies in. */
 export function currentSection(path: string, sections: readonly Section[]): Section | null {
-  const within = sections.filter((section) => path === section.href || path.startsWith(`${section.href}/`));
-  return within.reduce<Section | null>((best, section) => (best && best.href.length >= section.href.length ? best : section), null);
+  return sections.find((section) => path === section.href || (section.href !== TODAY && path.startsWith(`${section.href}/`))) ?? null;
 }

@@ -6,7 +6,7 @@ export function BackLink({ href, children }: { href: string; children: ReactNode
   return (
     <Link href={href} className="back">
       <span aria-hidden="true">←</span>
-      {children}
+      <span className="back-word">{children}</span>
     </Link>
   );
 }

@@ -177,7 +177,8 @@ function moveByKey(event: KeyboardEvent, body: HTMLElement | null): void {
   } else {
     const rows = [...body.querySelectorAll<HTMLElement>(":scope > tr")];
     const next = { ArrowDown: rows[rows.indexOf(row) + 1], ArrowUp: rows[rows.indexOf(row) - 1], Home: rows[0], End: rows.at(-1) }[event.key];
-    const stop = next?.querySelector<HTMLElement>(isTick ? "input[name=pick]" : "th a, input[name=pick]");
+    const tick = next?.querySelector<HTMLElement>("input[name=pick]");
+    const stop = isTick ? tick : (next?.querySelector<HTMLElement>("th a") ?? tick);
     if (!stop) return;
     event.preventDefault();
     stop.focus();

@@ -59,8 +59,10 @@ export function Yards({ value, bare = false }: FigureProps) {
       {isOnAMark ? null : (
         <>
           {" "}
-          <Mixed figure={beyond} />
-          <Unit short="in" one="inch" many="inches" figure={beyond} />
+          <span className="ml-1">
+            <Mixed figure={beyond} />
+            <Unit short="in" one="inch" many="inches" figure={beyond} />
+          </span>
         </>
       )}
     </span>

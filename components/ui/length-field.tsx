@@ -31,7 +31,7 @@ interface LengthFieldProps extends FieldWords, LengthLimits {
 
 /** Whole yards, a space, eighths; or a written fraction. Up and Down step an eighth, or 10 cm. A point asks which is meant. */
 export function LengthField(props: LengthFieldProps) {
-  const { label, hint, error, hideLabel = false, name, system = "yards", value, defaultValue = null, onChange, onEnter, priceOf, size = "desk", autoFocus, required } = props;
+  const { label, hint, error, hideLabel = false, optional = false, name, system = "yards", value, defaultValue = null, onChange, onEnter, priceOf, size = "desk", autoFocus, required } = props;
   const made = useId();
   const id = props.id ?? made;
   const input = useRef<HTMLInputElement>(null);
@@ -49,7 +49,8 @@ export function LengthField(props: LengthFieldProps) {
   const fault = words.reading.ok ? null : words.reading.fault;
   const isAsking = words.finished && fault?.code === "ambiguous";
   const said = error ?? (words.finished && fault && !isAsking && (fault.code !== "empty" || required) ? fault.message : null);
-  const wiring = fieldWiring(id, true, said);
+  const foot = hint ?? (said || isAsking ? null : <OtherMeasure value={read} system={system} />);
+  const wiring = fieldWiring(id, foot, said);
 
   function onKeyDown(event: KeyboardEvent<HTMLInputElement>) {
     if (event.key === "ArrowUp" || event.key === "ArrowDown") {
@@ -75,6 +76,7 @@ export function LengthField(props: LengthFieldProps) {
     <div className={["field", metric ? "length-metric" : "", size === "counter" ? "length-counter" : ""].filter(Boolean).join(" ")}>
       <label htmlFor={id} className={hideLabel ? "sr" : "field-label"}>
         {label}
+        {optional ? <span className="quiet">, if there is one</span> : null}
       </label>
       <div className="length-row">
         <span className="input-box length-box">
@@ -89,7 +91,7 @@ export function LengthField(props: LengthFieldProps) {
             // The counter's own screen opens on the length; nothing stands before it that would be skipped.
             autoFocus={autoFocus}
             maxLength={40}
-            style={{ width: `${Math.max(metric ? 5 : 3, words.text.length + 1)}ch` }}
+            style={{ width: `${Math.max(metric ? 5 : 3, words.text.length)}ch` }}
             onChange={(event) => words.write(event.target.value)}
             onKeyDown={onKeyDown}
             onFocus={(event) => event.target.select()}
@@ -103,7 +105,7 @@ export function LengthField(props: LengthFieldProps) {
         {isAsking ? null : <LengthKeys system={system} value={read} pick={(part) => words.put(withPart(read, part, system, limits))} />}
       </div>
       {isAsking ? <AmbiguousLength text={words.text} fault={fault} group={choices} settle={settle} again={() => input.current?.focus()} priceOf={priceOf} /> : null}
-      <FieldFoot id={id} error={said} hint={hint ?? <OtherMeasure value={read} system={system} />} />
+      <FieldFoot id={id} error={said} hint={foot} />
       {name ? <input type="hidden" name={name} value={read ?? words.text} /> : null}
     </div>
   );

@@ -3,7 +3,7 @@ import type { ReactNode } from "react";
 interface LoadingTapeProps {
   /** What is being worked out: "Working out 12 cut maps for the spring kits". */
   readonly title: ReactNode;
-  /** Things done; null where it is not known how many there are. */
+  /** Things done; null where it is not known yet how many there are. */
   readonly done: number | null;
   readonly of: number;
   /** "8 of 12 done, now Lantern Yard. You can leave this page." */
@@ -18,9 +18,10 @@ const WIDTH = 555;
 const MOST_TICKS = 60;
 
 /** Long work is a tape being drawn out from the core: one tick is one thing done. */
-export function LoadingTape({ title, done, of, children, stop, label }: LoadingTapeProps) {
-  const part = done === null || of <= 0 ? 0 : Math.min(1, done / of);
-  const each = of <= 0 ? 1 : Math.max(1, Math.ceil(of / MOST_TICKS));
+export function LoadingTape({ title, done: told, of, children, stop, label }: LoadingTapeProps) {
+  const done = told === null || of <= 0 ? null : Math.min(Math.max(told, 0), of);
+  const part = done === null ? 0 : done / of;
+  const each = Math.max(1, Math.ceil(of / MOST_TICKS));
   const ticks = done === null ? [] : Array.from({ length: Math.floor(done / each) + 1 }, (_, index) => index * each);
   const figures = done === null ? [] : [...new Set([0, Math.round(of / 3), Math.round((of * 2) / 3), of])];
   return (
