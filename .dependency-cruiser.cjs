@@ -11,7 +11,7 @@ const core = (...rooms) => rooms.map((room) => `^lib/core/${room}/`);
 const CORE_FILES = "^lib/core/[^/]+\\.ts$";
 const ALL_OF_CORE = "^lib/core/";
 const INPUT = "^lib/input/";
-const NEXT_FOR_COMPONENTS = packages("next/link", "next/image", "next/navigation", "next/dynamic", "next/dist");
+const NEXT_FOR_COMPONENTS = packages("next/form", "next/link", "next/image", "next/navigation", "next/dynamic", "next/dist");
 
 /** A rule: files under `from` import only themselves and what `may` names; node APIs only where `node` says so. */
 function room(name, from, comment, may, { node = false } = {}) {

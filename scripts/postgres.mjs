@@ -140,7 +140,8 @@ async function bringUp(run, folder, data, durable) {
     } else {
       await clearStalePostmaster(data);
       const settings = ["listen_addresses=127.0.0.1", "unix_socket_directories=", "max_connections=200", "timezone=UTC", "log_timezone=UTC"];
-      if (!durable) settings.push("fsync=off", "full_page_writes=off", "synchronous_commit=off");
+      // Without these a power cut may lose everything; a killed server still loses nothing that was committed.
+      if (!durable) settings.push("fsync=off", "full_page_writes=off");
       const options = [`-p ${await keptPort(folder)}`, ...settings.map((each) => `-c ${each}`)].join(" ");
       started = run("pg_ctl", ["start", "-D", data, "-l", log, "-w", "-t", "50", "-o", options], { quiet: true }).status === 0;
     }
