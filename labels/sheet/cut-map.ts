@@ -1,3 +1,4 @@
+import type { CutPiece } from "@/lib/core/piece/cut-piece";
 import type { MeasureSystem } from "@/lib/core/measure/format";
 import type { Length } from "@/lib/core/measure/length";
 import type { Blank, StripPlan, SubCut } from "@/lib/core/piece/strip-plan";
@@ -13,10 +14,15 @@ interface MapRoom {
   readonly width: number;
 }
 
-/** Points to the unit of length: both directions at one scale, no taller than 120 points. */
-export function cutMapScale(plan: StripPlan, cutLength: Length, width: number): number {
+/** Tallest drawing in points; a fabric cut into many shapes needs room for its letters. */
+const TALL = { few: 120, many: 180 };
+const MANY_SHAPES = 4;
+
+/** Points to the unit of length: both directions at one scale. */
+function cutMapScale(plan: StripPlan, cutLength: Length, width: number): number {
   const along = Math.max(1, cutLength, plan.length);
-  return Math.min((width - 34) / along, 120 / Math.max(1, plan.usableWidth));
+  const shapes = new Set(plan.strips.flatMap((strip) => strip.cuts.map((cut) => cut.blank))).size;
+  return Math.min((width - 34) / along, (shapes > MANY_SHAPES ? TALL.many : TALL.few) / Math.max(1, plan.usableWidth));
 }
 
 export function cutMapHeight(plan: StripPlan, cutLength: Length, width: number): number {
@@ -32,7 +38,7 @@ export function cutMapWidth(plan: StripPlan, cutLength: Length, width: number): 
  * Draws where each strip and sub-cut lies: along the cloth to the right, selvages at the top and the foot, strips
  * numbered below. Returns the foot of the drawing.
  */
-export function drawCutMap(press: Press, plan: StripPlan, blanks: readonly Blank[], letters: ReadonlyMap<string, string>, cutLength: Length, measure: MeasureSystem, room: MapRoom): number {
+export function drawCutMap(press: Press, plan: StripPlan, blanks: readonly Blank[], pieces: ReadonlyMap<string, CutPiece>, cutLength: Length, measure: MeasureSystem, room: MapRoom): number {
   const { doc } = press;
   const scale = cutMapScale(plan, cutLength, room.width);
   const left = room.x + 22;
@@ -49,7 +55,7 @@ export function drawCutMap(press: Press, plan: StripPlan, blanks: readonly Blank
     drawRest(press, x, cloth.y, strip.width * scale, height);
     for (const cut of strip.cuts) {
       const blank = marks.get(cut.blank);
-      if (blank) drawSubCut(press, cut, blank, letters.get(blank.pieceKey) ?? blank.label, x, cloth.y, scale);
+      if (blank) drawSubCut(press, cut, blank, pieces.get(blank.pieceKey), x, cloth.y, scale);
     }
     doc.rect(x, cloth.y, strip.width * scale, height).lineWidth(0.9).strokeColor(INK).stroke();
     drawStripNumber(press, String(index + 1), x, strip.width * scale, cloth.y + height);
@@ -67,23 +73,44 @@ function drawRest(press: Press, x: number, y: number, width: number, height: num
   press.doc.restore();
 }
 
-function drawSubCut(press: Press, cut: SubCut, blank: Blank, letter: string, stripX: number, top: number, scale: number): void {
+function drawSubCut(press: Press, cut: SubCut, blank: Blank, piece: CutPiece | undefined, stripX: number, top: number, scale: number): void {
   const { doc } = press;
   const box = { x: stripX, y: top + cut.at * scale, width: cut.along * scale, height: cut.across * scale };
   doc.rect(box.x, box.y, box.width, box.height).fillAndStroke("#ffffff", INK);
   doc.lineWidth(0.5).strokeColor(INK);
-  if (blank.mark === "diagonal" || blank.mark === "both-diagonals") doc.moveTo(box.x, box.y + box.height).lineTo(box.x + box.width, box.y);
-  if (blank.mark === "both-diagonals") doc.moveTo(box.x, box.y).lineTo(box.x + box.width, box.y + box.height);
+  const rises = blank.mark === "both-diagonals" || (blank.mark === "diagonal" && diagonalRises(piece, cut.turned));
+  const falls = blank.mark === "both-diagonals" || (blank.mark === "diagonal" && !rises);
+  if (rises) doc.moveTo(box.x, box.y + box.height).lineTo(box.x + box.width, box.y);
+  if (falls) doc.moveTo(box.x, box.y).lineTo(box.x + box.width, box.y + box.height);
   if (blank.mark === "slant") doc.moveTo(box.x, box.y + box.height * 0.35).lineTo(box.x + box.width, box.y + box.height * 0.65);
   doc.stroke();
+  const letter = piece?.letter ?? blank.label;
   const size = Math.min(8, box.height * 0.62, (box.width * 0.8) / Math.max(1, letter.length * 0.62));
-  if (size < 4) return;
+  if (size < 3.5) return;
   const style: Style = { face: "strong", size, colour: INK };
   const width = textWidth(press, letter, style);
   if (blank.mark !== "plain" && blank.mark !== "long") {
     doc.rect(box.x + box.width / 2 - width / 2 - 0.8, box.y + box.height / 2 - size / 2, width + 1.6, size).fill("#ffffff");
   }
   drawLine(press, letter, style, box.x + box.width / 2, box.y + box.height / 2 + size * 0.35, { align: "centre" });
+}
+
+/**
+ * Which diagonal of its rectangle a half-rectangle is cut along, with the right side of the cloth up: the patch is
+ * turned, never mirrored, from its own pose to the way it lies on the map. For squares both give the same patches.
+ */
+function diagonalRises(piece: CutPiece | undefined, turned: boolean): boolean {
+  if (piece?.method.kind !== "half-rectangle") return true;
+  const corners = piece.finished;
+  let [longest, risesInPose] = [0, true];
+  corners.forEach(([x, y], index) => {
+    const [nextX, nextY] = corners[(index + 1) % corners.length] ?? [x, y];
+    const side = Math.hypot(nextX - x, nextY - y);
+    if (side > longest) [longest, risesInPose] = [side, (nextX - x) * (nextY - y) < 0];
+  });
+  const span = (axis: 0 | 1) => Math.max(...corners.map((corner) => corner[axis])) - Math.min(...corners.map((corner) => corner[axis]));
+  const quarterTurn = span(1) >= span(0) === piece.method.along.exact >= piece.method.across.exact;
+  return risesInPose !== (quarterTurn !== turned);
 }
 
 function drawStripNumber(press: Press, number: string, x: number, width: number, foot: number): void {

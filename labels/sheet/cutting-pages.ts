@@ -42,10 +42,10 @@ function drawFabric(flow: SheetFlow, sheet: InstructionSheetInput, fabric: Sheet
   const beside = besideMap(flow, fabric, map);
   if (fabric.layout) {
     flow.need(map + 8);
-    const letters = new Map(fabric.pieces.map((piece) => [piece.key, piece.letter]));
+    const pieces = new Map(fabric.pieces.map((piece) => [piece.key, piece]));
     const room = { x: flow.left, y: flow.y + 8, width: flow.width };
     const top = flow.y + 4;
-    const foot = drawCutMap(flow.press, fabric.layout.plan, fabric.layout.blanks, letters, fabric.length, sheet.measure, room);
+    const foot = drawCutMap(flow.press, fabric.layout.plan, fabric.layout.blanks, pieces, fabric.length, sheet.measure, room);
     flow.y = beside ? Math.max(foot, drawPatchRows(flow, sheet, fabric, { ...beside, y: top })) : foot;
   }
   drawPatches(flow, sheet, fabric, beside === null);
@@ -80,6 +80,7 @@ function drawFabricHead(flow: SheetFlow, sheet: InstructionSheetInput, fabric: S
 function drawStripTable(flow: SheetFlow, sheet: InstructionSheetInput, fabric: SheetFabric, groups: readonly StripGroup[]): void {
   const { press, left, right } = flow;
   const pieces = new Map(fabric.pieces.map((piece) => [piece.key, piece]));
+  const usableWidth = fabric.layout?.plan.usableWidth ?? sheet.usableWidth;
   const columns = { numbers: left + 92, each: left + 168, becomes: left + 330 };
   if (groups.length) {
     const style: Style = { face: "text", size: 8.5, colour: QUIET };
@@ -99,7 +100,7 @@ function drawStripTable(flow: SheetFlow, sheet: InstructionSheetInput, fabric: S
     group.each.forEach(({ blank, count }, i) => {
       const piece = pieces.get(blank.pieceKey);
       const baseline = first + i * 13;
-      drawLine(press, piece ? blankWords(piece, count, sheet.measure) : `${count} ${blank.label}`, BODY, columns.each, baseline, { width: 156 });
+      drawLine(press, piece ? blankWords(piece, blank, count, usableWidth, sheet.measure) : `${count} ${blank.label}`, BODY, columns.each, baseline, { width: 156 });
       const patches = drawLine(press, patchWords(piece, blank.label, group.strips * count * blank.gives), { face: "bold", size: 10, colour: INK }, right, baseline, { align: "right" });
       drawLine(press, piece ? afterCutting(piece) : "", BODY, columns.becomes, baseline, { width: right - columns.becomes - patches - 6 });
     });

@@ -1,9 +1,11 @@
 import type { MeasureSystem } from "@/lib/core/measure/format";
+import type { Length } from "@/lib/core/measure/length";
+import type { Blank } from "@/lib/core/piece/strip-plan";
 import type { CutMethod, CutPiece, CutSize } from "@/lib/core/piece/cut-piece";
 import { exactLength, rulerFigure, rulerLength, soldLength } from "../press/lengths";
 
 /** "12 squares, 3 1/2 in": so many of the rectangles that a piece comes out of. */
-export function blankWords(piece: CutPiece, count: number, measure: MeasureSystem): string {
+export function blankWords(piece: CutPiece, blank: Blank, count: number, usableWidth: Length, measure: MeasureSystem): string {
   const { method } = piece;
   const many = count === 1 ? "" : "s";
   switch (method.kind) {
@@ -20,7 +22,7 @@ export function blankWords(piece: CutPiece, count: number, measure: MeasureSyste
     case "angled-strip":
       return `${count} ${count === 1 ? "piece" : "pieces"}, ${rulerLength(method.pitch.ruler, measure)} apart at ${degrees(method.angleDegrees)}`;
     case "long-strip":
-      return count === 1 ? "the whole strip" : `${count} lengths`;
+      return count === 1 && blank.across >= usableWidth ? "the whole strip" : `${count} length${many}, ${rulerLength(blank.across, measure)}`;
   }
 }
 

@@ -4,6 +4,7 @@ import { cutListPdf } from "@/labels/cut-list-sheet";
 import { instructionSheetPdf } from "@/labels/instruction-sheet";
 import { groupStrips, numberWords } from "@/labels/sheet/strip-groups";
 import { CUT_LIST, LONG_CUT_LIST } from "@/tests/fixtures/labels/shop-papers";
+import { everyMethodSheet } from "@/tests/fixtures/labels/every-method-sheet";
 import { LONG_SHEET, WEIR_POOL_SHEET } from "@/tests/fixtures/labels/weir-pool-sheet";
 import { rasterise, readPdf, textOffThePage, type Raster } from "./read-pdf";
 
@@ -69,6 +70,15 @@ describe("the instruction sheet", () => {
         const cut = groups.flatMap((group) => group.each.map((each) => (each.blank.key === blank.key ? each.count * group.strips : 0)));
         expect(cut.reduce((sum, count) => sum + count, 0)).toBe(blank.count);
       }
+    }
+  });
+
+  it("lists what the planner lays, whichever way a piece is cut", async () => {
+    const { pages } = await readPdf(await instructionSheetPdf(await everyMethodSheet()));
+    expect(textOffThePage(pages)).toEqual([]);
+    const text = pages.map((page) => page.text).join(" ").replace(/\s+/g, " ");
+    for (const said of ["cut twice, corner to corner", "cut once, corner to corner, the other way", "at 60 degrees", "By the template", "the whole strip", "3 lengths, 8 in", "Er, 24 patches", "the long edges are bias", "Border. 60 1\u20442 in in all"]) {
+      expect(text).toContain(said);
     }
   });
 
