@@ -21,7 +21,7 @@ export function checkNode(version = process.versions.node) {
 export function ensurePackages(root) {
   if (sameAsLock(root)) return;
   console.log("Installing the packages of package-lock.json. The first time this takes a minute or two …");
-  const result = spawnSync("npm", ["ci", "--no-audit", "--no-fund"], { cwd: root, encoding: "utf8", stdio: ["ignore", "inherit", "pipe"] });
+  const result = spawnSync("npm", ["ci", "--no-audit", "--no-fund", "--fetch-retry-mintimeout=2000", "--fetch-retry-maxtimeout=8000"], { cwd: root, encoding: "utf8", stdio: ["ignore", "inherit", "pipe"] });
   if (result.error) throw new PlainFault(`npm could not be started (${result.error.message}). It comes with Node.js.`);
   if (result.status !== 0) throw new PlainFault(npmFault(result.stderr));
 }
