@@ -132,6 +132,7 @@ function solveInteger(highs: Highs, question: IntegerQuestion): IntegerAnswer {
       presolve: "off",
       mip_allow_restart: false,
       mip_detect_symmetry: false,
+      mip_heuristic_effort: 0.3,
     });
     if (question.start) model.setSolution({ colValue: [...question.start] });
     const most = question.iterations ?? Infinity;

@@ -9,7 +9,7 @@ import { tidyLayout } from "./tidy-layout";
 import { writeStripPlan } from "./write-strip-plan";
 
 /** About a second's work for the load of one fabric. */
-export const STRIP_BUDGET: Budget = { patterns: 50_000, nodes: 400 };
+export const STRIP_BUDGET: Budget = { patterns: 50_000, nodes: 300 };
 
 /** More sizes or pieces than any cutting day holds; beyond it a plan would not fit a page or a memory. */
 export const MOST_KINDS = 400;

@@ -11,6 +11,8 @@ const COLUMNS_TO_FIND = 400;
 const COLUMNS_TO_PROVE = 3000;
 /** How often the gap is halved before the listing is given up. */
 const MOST_HALVINGS = 12;
+/** Of what is left of the budget, spent on each attempt to find. */
+const FIRST_SHARE = 0.6;
 /** Simplex iterations times columns that cost as much as a node of the budget. */
 const WORK_OF_A_NODE = 8000;
 
@@ -35,16 +37,17 @@ export async function settleByInteger(search: StripSearch, master: StripMaster, 
     const before = search.best.length;
     // A plan that uses a strip left out costs at least so much; where none that matters is left out, it is no shorter.
     const without = (count: number) => (listed.length <= count && upTo >= gap ? before : relaxation.bound + (listed[count]?.reducedCost ?? upTo));
-    await solveOver(search, master, listed.slice(0, COLUMNS_TO_FIND), without(COLUMNS_TO_FIND));
+    await solveOver(search, master, listed.slice(0, COLUMNS_TO_FIND), without(COLUMNS_TO_FIND), FIRST_SHARE);
     if (search.best.length < before) continue;
     if (search.settled || listed.length <= COLUMNS_TO_FIND || search.meter.spent) return;
-    await solveOver(search, master, listed.slice(0, COLUMNS_TO_PROVE), without(COLUMNS_TO_PROVE));
+    await solveOver(search, master, listed.slice(0, COLUMNS_TO_PROVE), without(COLUMNS_TO_PROVE), 1);
     if (search.best.length === before) return;
   }
 }
 
 /** Solves over the strips given. A plan costs no less than what that proves, or it uses another strip and costs no less than `otherwise`. */
-async function solveOver(search: StripSearch, master: StripMaster, listed: readonly StripPattern[], otherwise: number): Promise<void> {
+async function solveOver(search: StripSearch, master: StripMaster, listed: readonly StripPattern[], otherwise: number, share: number): Promise<void> {
+  const nodes = Math.ceil(search.meter.nodesLeft * share);
   const { problem, meter } = search;
   const demand = problem.kinds.map((kind) => kind.demand);
   const patterns = withStart(listed, search.best.groups);
@@ -53,8 +56,8 @@ async function solveOver(search: StripSearch, master: StripMaster, listed: reado
     rows: [...demand, ...master.required].map((lower) => ({ lower, upper: Infinity })),
     columns: patterns.map((pattern) => ({ cost: problem.heights[pattern.height] ?? 0, ...master.entries(pattern), lower: 0, upper: mostTimes(pattern, demand) })),
     start,
-    nodes: meter.nodesLeft,
-    iterations: Math.ceil((meter.nodesLeft * WORK_OF_A_NODE) / (patterns.length + 100)),
+    nodes,
+    iterations: Math.ceil((nodes * WORK_OF_A_NODE) / (patterns.length + 100)),
     gap: 0.999,
     stopped: () => meter.stopped,
   });
