@@ -7,7 +7,7 @@ export type Currency = keyof typeof EXPONENTS;
 export const CURRENCIES = Object.keys(EXPONENTS) as Currency[];
 
 export function isCurrency(code: string): code is Currency {
-  return code in EXPONENTS;
+  return Object.hasOwn(EXPONENTS, code);
 }
 
 /** Throws RangeError on a currency that is not in the table. */

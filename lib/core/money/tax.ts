@@ -36,10 +36,12 @@ export function taxSale(lines: readonly TaxedLine[], rules: TaxRules): TaxedSale
   return { lineTaxes, goods, tax, total: rules.included ? goods : addMinor([goods, tax]) };
 }
 
-/** The tax on one amount, rounded half up. */
+/** The tax on one amount, rounded half up; on goods that come back (below nothing) it is what was paid on them. */
 export function taxOf(amount: number, rate: number, included: boolean): Minor {
+  if (!Number.isSafeInteger(rate) || rate < 0) throw new RangeError(`A tax rate is a whole number of 1/10 000 of a percent from nothing up, not ${rate}`);
   const under = BigInt(included ? WHOLE + rate : WHOLE);
-  return minor(Number((2n * BigInt(amount) * BigInt(rate) + under) / (2n * under)));
+  const tax = Number((2n * BigInt(Math.abs(amount)) * BigInt(rate) + under) / (2n * under));
+  return minor(amount < 0 ? -tax : tax);
 }
 
 function shareBySale(lines: readonly TaxedLine[], included: boolean): Minor[] {
@@ -53,11 +55,14 @@ function shareBySale(lines: readonly TaxedLine[], included: boolean): Minor[] {
   return taxes.map(minor);
 }
 
-/** Shares an amount by weights so that the parts add up: floors first, then one each to the largest remainders. */
+/**
+ * Shares an amount by weights so that the parts add up: floors first, then one each to the largest remainders, the first
+ * of equal ones. Weights and amount may lie below nothing; where the weights cancel out, the first part takes all.
+ */
 export function shareOut(amount: number, weights: readonly number[]): Minor[] {
   const whole = weights.reduce((sum, weight) => sum + BigInt(weight), 0n);
   if (whole === 0n) return weights.map((_, index) => minor(index === 0 ? amount : 0));
-  const parts = weights.map((weight, index) => ({ index, floor: (BigInt(amount) * BigInt(weight)) / whole, rest: (BigInt(amount) * BigInt(weight)) % whole }));
+  const parts = weights.map((weight, index) => ({ index, ...divide(BigInt(amount) * BigInt(weight), whole) }));
   let left = amount - Number(parts.reduce((sum, part) => sum + part.floor, 0n));
   const shares = parts.map((part) => Number(part.floor));
   for (const part of [...parts].sort((a, b) => (a.rest === b.rest ? a.index - b.index : a.rest > b.rest ? -1 : 1))) {
@@ -66,4 +71,11 @@ export function shareOut(amount: number, weights: readonly number[]): Minor[] {
     left -= 1;
   }
   return shares.map(minor);
+}
+
+/** Division that goes down, with a remainder from nothing up whatever the signs. */
+function divide(amount: bigint, by: bigint): { readonly floor: bigint; readonly rest: bigint } {
+  const [over, under] = by < 0n ? [-amount, -by] : [amount, by];
+  const rest = ((over % under) + under) % under;
+  return { floor: (over - rest) / under, rest };
 }

@@ -1,4 +1,5 @@
 import { fail, ok, type Result } from "../result";
+import { roundToCash } from "./cash-rounding";
 import { minor, type Minor } from "./money";
 
 export type TenderKind = "cash" | "card" | "gift-card" | "store-credit";
@@ -24,11 +25,6 @@ export interface Settlement {
   readonly change: Minor;
 }
 
-/** The nearest sum that coins can pay, halves up. */
-export function roundToCash(amount: number, step: number): Minor {
-  return minor(Math.floor(amount / step + 0.5) * step);
-}
-
 /** What is left to pay after some tenders; never below nothing. */
 export function stillToPay(total: number, tenders: readonly Tender[]): Minor {
   return minor(Math.max(0, total - tenders.reduce((sum, tender) => sum + tender.given, 0)));
@@ -39,6 +35,7 @@ export function stillToPay(total: number, tenders: readonly Tender[]): Minor {
  * `not-enough` (facts.missing), `too-much` when something other than cash exceeds what is due.
  */
 export function settle(total: number, tenders: readonly Tender[], cashStep = 1): Result<Settlement, "not-enough" | "too-much"> {
+  if (tenders.some((tender) => !Number.isSafeInteger(tender.given) || tender.given < 0)) throw new RangeError("What is given is a whole number of minor units from nothing up");
   const other = tenders.filter((tender) => tender.kind !== "cash").reduce((sum, tender) => sum + tender.given, 0);
   if (other > total) return fail("too-much", "More than what is due was taken by card or voucher. Only cash gives change.");
   const cash = tenders.filter((tender) => tender.kind === "cash");
