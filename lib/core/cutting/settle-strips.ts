@@ -1,4 +1,5 @@
 import type { StripPattern } from "./fill-strip";
+import type { IntegerQuestion } from "./solver";
 import type { StripGroup } from "./strip-layout";
 import type { Relaxation, StripMaster } from "./strip-master";
 import type { StripSearch } from "./strip-search";
@@ -13,6 +14,8 @@ const COLUMNS_TO_PROVE = 3000;
 const MOST_HALVINGS = 12;
 /** Of what is left of the budget, spent on each attempt to find. */
 const FIRST_SHARE = 0.6;
+/** Up to so many strips the integer programme counts the strips of each width. */
+const FEW_STRIPS = 200;
 /** Simplex iterations times columns that cost as much as a node of the budget. */
 const WORK_OF_A_NODE = 8000;
 
@@ -47,15 +50,12 @@ export async function settleByInteger(search: StripSearch, master: StripMaster, 
 
 /** Solves over the strips given. A plan costs no less than what that proves, or it uses another strip and costs no less than `otherwise`. */
 async function solveOver(search: StripSearch, master: StripMaster, listed: readonly StripPattern[], otherwise: number, share: number): Promise<void> {
-  const nodes = Math.ceil(search.meter.nodesLeft * share);
-  const { problem, meter } = search;
-  const demand = problem.kinds.map((kind) => kind.demand);
+  const { meter } = search;
+  const nodes = Math.ceil(meter.nodesLeft * share);
   const patterns = withStart(listed, search.best.groups);
-  const start = patterns.map((pattern) => search.best.groups.find((group) => nameOf(group) === nameOf(pattern))?.times ?? 0);
+  const question = questionOver(search, master, patterns);
   const answer = await search.solver.solveInteger({
-    rows: [...demand, ...master.required].map((lower) => ({ lower, upper: Infinity })),
-    columns: patterns.map((pattern) => ({ cost: problem.heights[pattern.height] ?? 0, ...master.entries(pattern), lower: 0, upper: mostTimes(pattern, demand) })),
-    start,
+    ...question,
     nodes,
     iterations: Math.ceil((nodes * WORK_OF_A_NODE) / (patterns.length + 100)),
     gap: 0.999,
@@ -72,6 +72,30 @@ async function solveOver(search: StripSearch, master: StripMaster, listed: reado
   }
   search.raise(Math.min(answer.bound, otherwise));
   await meter.pause();
+}
+
+/**
+ * The restricted master as an integer programme, the best layout its start. For a short layout the number of strips of
+ * each width becomes a whole column of its own, so that the search can branch on it: that closes what single strips
+ * leave open. For long ones it only slows the search down.
+ */
+function questionOver(search: StripSearch, master: StripMaster, patterns: readonly StripPattern[]): Pick<IntegerQuestion, "rows" | "columns" | "start"> {
+  const { kinds, heights } = search.problem;
+  const demand = kinds.map((kind) => kind.demand);
+  const rows = [...demand, ...master.required].map((lower) => ({ lower, upper: Infinity }));
+  const start = patterns.map((pattern) => search.best.groups.find((group) => nameOf(group) === nameOf(pattern))?.times ?? 0);
+  const cost = (height: number) => heights[height] ?? 0;
+  const columns = patterns.map((pattern) => ({ cost: cost(pattern.height), ...master.entries(pattern), lower: 0, upper: mostTimes(pattern, demand) }));
+  if (search.best.groups.reduce((total, group) => total + group.times, 0) > FEW_STRIPS) return { rows, columns, start };
+  const used = [...new Set(patterns.map((pattern) => pattern.height))].sort((a, b) => a - b);
+  return {
+    rows: [...rows, ...used.map(() => ({ lower: 0, upper: 0 }))],
+    columns: [
+      ...columns.map((column, index) => ({ ...column, cost: 0, rows: [...column.rows, rows.length + used.indexOf(patterns[index]?.height ?? 0)], values: [...column.values, -1] })),
+      ...used.map((height, index) => ({ cost: cost(height), rows: [rows.length + index], values: [1], lower: 0, upper: Infinity })),
+    ],
+    start: [...start, ...used.map((height) => start.reduce((total, times, index) => (patterns[index]?.height === height ? total + times : total), 0))],
+  };
 }
 
 /** Strips by reduced cost, cheapest first, complete up to the gap returned: less than asked for where there are too many. */
