@@ -42,7 +42,7 @@ export async function findByCode(actor: Actor, { text }: { text: string }): Prom
   const code = parseCode(text);
   const sql = code.ok ? BY_KIND[code.value.kind] : undefined;
   if (code.ok && sql) {
-    const found = await read(sql, [text.slice(0, 60).toUpperCase().replaceAll(/[\s-]/g, ""), code.value.number]);
+    const found = await read(sql, [code.value.text, code.value.number]);
     if (found) return ok(found);
   }
   const notion = await read(`SELECT 'notion' AS kind, id, number, name AS title FROM notions WHERE number = $1 OR gtin = $1`, [text.trim().slice(0, 60)]);

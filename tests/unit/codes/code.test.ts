@@ -27,9 +27,19 @@ describe("a code", () => {
     fc.assert(
       fc.property(fc.nat(2_147_483_647), (number) => {
         const code = makeCode("kit", number);
-        expect(parseCode(` ${code.slice(0, 3).toLowerCase()} ${code.slice(3)} `)).toEqual({ ok: true, value: { kind: "kit", number } });
+        expect(parseCode(` ${code.slice(0, 3).toLowerCase()} ${code.slice(3)} `)).toEqual({ ok: true, value: { kind: "kit", number, text: code } });
       }),
     );
+  });
+
+  it("is found behind a scanner's prefix, in an address, and with letters for figures", () => {
+    const code = makeCode("bolt", 101);
+    const read = { ok: true, value: { kind: "bolt", number: 101, text: code } };
+    expect(parseCode(`]C1${code}`)).toEqual(read);
+    expect(parseCode(`https://shop.example/kits/${code}?from=label`)).toEqual(read);
+    expect(parseCode(`bOlo1${code.at(-1)}`)).toEqual(parseCode(`B0101${code.at(-1)}`));
+    expect(parseCode(`BOIOI${code.at(-1)}`)).toEqual(read);
+    expect(parseCode("https://shop.example/")).toMatchObject({ ok: false, fault: { code: "not-a-code" } });
   });
 
   it("says what is wrong with it", () => {
