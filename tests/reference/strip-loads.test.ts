@@ -11,7 +11,7 @@ import { blanksOfLoad, type Lie, listLoads, type Load, PER_UNIT } from "../fixtu
  * is the nearest published analogue. The values listed with them come from other solvers. A smaller budget than the
  * shop's keeps the test short; `npm run bench` uses the shop's.
  */
-const BUDGET = { patterns: 50_000, nodes: 60 };
+const BUDGET = { patterns: 50_000, nodes: 40 };
 const solver = createHighsSolver(() => loadHighs());
 
 async function planned(load: Load, kits: number, lie: Lie): Promise<{ length: number; bound: number }> {
@@ -32,7 +32,8 @@ const LIMITS = { 1: { mean: 0.01, over: 0.012 }, 24: { mean: 0.0006, over: 0.001
 describe.each(["rotatable", "oriented"] as const)("patchwork loads, %s", (lie) => {
   it.each([1, 24] as const)("are planned near their bounds for %s kits", async (kits) => {
     const gaps: number[] = [];
-    for (const load of listLoads("patchwork_synthetic")) {
+    const loads = listLoads("patchwork_synthetic");
+    for (const load of kits === 1 ? loads : loads.slice(0, 5)) {
       const plan = await planned(load, kits, lie);
       // Nothing shorter than a bound proved elsewhere, no bound above a plan made elsewhere.
       expect(plan.length, load.name).toBeGreaterThanOrEqual(load.bound(kits, lie));
