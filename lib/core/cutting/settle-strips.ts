@@ -99,7 +99,7 @@ function questionOver(search: StripSearch, master: StripMaster, patterns: readon
 }
 
 /** Strips by reduced cost, cheapest first, complete up to the gap returned: less than asked for where there are too many. */
-function listStrips(search: StripSearch, relaxation: Relaxation, gap: number): { listed: Listed[]; upTo: number } {
+export function listStrips(search: StripSearch, relaxation: Relaxation, gap: number): { listed: Listed[]; upTo: number } {
   let upTo = gap;
   for (let halved = 0; halved < MOST_HALVINGS; halved++, upTo /= 2) {
     const listed = listUpTo(search, relaxation, upTo);

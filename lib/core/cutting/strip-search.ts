@@ -4,6 +4,7 @@ import { boundAnyLayout, boundStripCount } from "./bound-bars";
 import { diveForLayout } from "./dive-strips";
 import { fillByValue, firstFitShelves } from "./fill-greedily";
 import { StripFiller } from "./fill-strip";
+import { canSimplify, simplifyLayout } from "./simplify-strips";
 import { settleByInteger } from "./settle-strips";
 import type { Solver } from "./solver";
 import { SolverBroken } from "./solver";
@@ -62,41 +63,46 @@ export class StripSearch {
   }
 
   async run(): Promise<SearchOutcome> {
-    if (!this.settled) {
-      try {
-        await this.improve();
-      } catch (error) {
-        // The solver broke: the best layout and the bounds proved so far still hold.
-        if (!(error instanceof SolverBroken)) throw error;
-      }
+    try {
+      if (!this.settled) await this.boundFromBelow();
+      if ((!this.settled || canSimplify(this)) && !this.meter.stopped) await this.searchStrips();
+    } catch (error) {
+      // The solver broke: the best layout and the bounds proved so far still hold.
+      if (!(error instanceof SolverBroken)) throw error;
     }
     return { layout: this.best, stripsBound: this.bound, anyLayoutBound: this.anyLayoutBound, meter: this.meter };
   }
 
-  private async improve(): Promise<void> {
+  private async boundFromBelow(): Promise<void> {
     this.meter.say(0.05, "Finding what no layout can undercut.");
     this.raise(await boundAnyLayout(this.problem, this.solver, this.meter));
     this.anyLayoutBound = this.bound;
-    if (this.settled || this.meter.stopped) return;
+  }
+
+  private async searchStrips(): Promise<void> {
     const master = await StripMaster.open(this.problem, this.filler, this.solver, this.meter);
     try {
-      await this.search(master);
+      for (const group of this.best.groups) master.add(group);
+      this.meter.say(0.1, `Finding strips for ${this.problem.kinds.length === 1 ? "one size" : `${this.problem.kinds.length} sizes`}.`);
+      const relaxation = await master.relax(this.problem.kinds.map((kind) => kind.demand), []);
+      this.raise(relaxation.bound);
+      if (!this.settled) await this.shorten(master, relaxation);
+      if (canSimplify(this)) {
+        this.meter.say(0.95, "Looking for fewer strip widths of the same length.");
+        await simplifyLayout(this, relaxation);
+      }
     } finally {
       master.dispose();
     }
   }
 
-  private async search(master: StripMaster): Promise<void> {
+  private async shorten(master: StripMaster, first: Relaxation): Promise<void> {
     const { problem, meter } = this;
     const demand = problem.kinds.map((kind) => kind.demand);
-    for (const group of this.best.groups) master.add(group);
-    meter.say(0.1, `Finding strips for ${problem.kinds.length === 1 ? "one size" : `${problem.kinds.length} sizes`}.`);
-    let relaxation = await master.relax(demand, []);
-    this.raise(relaxation.bound);
-    this.round(relaxation, master);
+    this.round(first, master);
     if (this.settled || meter.spent) return;
-    relaxation = (await this.countStrips(master)) ? await master.relax(demand, []) : relaxation;
-    this.raise(relaxation.bound);
+    await this.countStrips(master);
+    this.raise((await master.relax(demand, [])).bound);
     for (let skipped = -1; skipped < DISCREPANCIES && !this.settled && !meter.spent; skipped++) {
       meter.say(0.3 + 0.04 * (skipped + 1), "Rounding to whole strips.");
       await diveForLayout(this, master, skipped);
@@ -128,16 +134,12 @@ export class StripSearch {
     }
   }
 
-  /** Counts the strips that the wide pieces need at the least; true when that says more than the relaxation did. */
-  private async countStrips(master: StripMaster): Promise<boolean> {
-    let tightened = false;
+  /** Counts the strips that the wide pieces need at the least, and holds the master to it. */
+  private async countStrips(master: StripMaster): Promise<void> {
     for (const [level, height] of master.levels.entries()) {
       const members = this.problem.kinds.map((kind) => Math.min(...kind.ways.map((way) => way.along)) >= (this.problem.heights[height] ?? 0));
-      const count = await boundStripCount(this.problem, members, this.filler, this.solver, this.meter);
-      master.requireStrips(level, count);
-      tightened = true;
+      master.requireStrips(level, await boundStripCount(this.problem, members, this.filler, this.solver, this.meter));
     }
-    return tightened;
   }
 }
 

@@ -22,6 +22,22 @@ export function tidyLayout(problem: StripProblem, layout: Layout): Layout {
   return tidied.length <= layout.length ? tidied : layout;
 }
 
+/** What one more strip width weighs against one more setting of the ruler: it is another stack to keep apart. */
+export const WIDTH_WEIGHT = 3;
+
+/**
+ * What a layout asks of the cutter: strip widths count most, then the sizes in each strip and the pieces trimmed. Only
+ * for comparing layouts of the same pieces.
+ */
+export function effortOf(problem: StripProblem, layout: Layout): number {
+  const widths = new Set(layout.groups.map((group) => group.height)).size;
+  return layout.groups.reduce((total, group) => {
+    const kinds = group.counts.flatMap((count, kind) => (count > 0 ? [kind] : []));
+    const trimmed = kinds.filter((kind) => !problem.kinds[kind]?.ways.some((way) => way.along === problem.heights[group.height] && way.across === problem.across[group.height]?.[kind]));
+    return total + group.times * (1 + kinds.length + trimmed.length);
+  }, widths * WIDTH_WEIGHT);
+}
+
 /** Different sizes summed over the strips, then different strips: the fewer, the less there is to read and to set. */
 function mixture(strips: readonly (readonly number[])[]): number {
   const sizes = strips.reduce((total, counts) => total + counts.filter((count) => count > 0).length, 0);

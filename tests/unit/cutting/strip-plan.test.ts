@@ -35,6 +35,16 @@ describe("planStrips", () => {
     expect(made.status).toBe("optimal");
   });
 
+  it("takes the plan with the fewest widths and mixed strips among those of the least length", async () => {
+    const blanks = [buildBlank("A", 4.5, 4.5, 12), buildBlank("B", 3.875, 3.875, 48), buildBlank("C", 2.5, 4.5, 48, { mayTurn: true }), buildBlank("Binding", 2.5, 40, 6, { mark: "long" })];
+    const made = await plan(blanks);
+    expect(made.length).toBe(inches(54.875));
+    expect(made.status).toBe("optimal");
+    expect(new Set(made.strips.map((strip) => strip.width)).size).toBe(3);
+    expect(made.strips.filter((strip) => new Set(strip.cuts.map((cut) => cut.blank)).size > 1)).toHaveLength(1);
+    expect(made.strips.every((strip) => strip.cuts.every((cut) => cut.along === strip.width))).toBe(true);
+  });
+
   it("turns a piece only where it may be turned", async () => {
     const kept = await plan([buildBlank("R", 20, 4, 2)]);
     const turned = await plan([buildBlank("R", 20, 4, 2, { mayTurn: true })]);
