@@ -7,11 +7,11 @@ import type { StripSearch } from "./strip-search";
 import { effortOf, WIDTH_WEIGHT } from "./tidy-layout";
 
 /** Longer plans are left to the tidying that follows: the programme below would cost more than the planning. */
-const FEW_STRIPS = 60;
+const FEW_STRIPS = 40;
 /** Strips looked at, the least costly first. */
 const MOST_COLUMNS = 150;
-const NODES = 60;
-const ITERATIONS = 4000;
+const NODES = 40;
+const ITERATIONS = 1500;
 
 /** Whether there is anything to simplify, in a plan short enough for it. */
 export function canSimplify(search: StripSearch): boolean {
