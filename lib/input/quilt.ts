@@ -13,6 +13,7 @@ export const storedQuiltInput = z.object({
   columns: z.number().int().min(1, "A quilt has at least one column.").max(40, "A quilt has at most 40 columns."),
   blocks: z.array(z.object({ blockVersionId: z.number().int().positive(), roles: z.record(roleId, roleId) })).min(1).max(41).readonly(),
   cells: z.array(cell).min(1).max(4000).readonly(),
+  settingRole: roleId.optional(),
   sashing: z.object({ width: lengthInput, role: roleId, cornerstones: roleId.nullable(), allRound: z.boolean() }).nullable(),
   borders: z.array(z.object({ width: lengthInput, role: roleId, corners: roleId.nullable() })).max(12).readonly(),
   binding: z.object({ stripWidth: lengthInput, role: roleId, extra: lengthOrZero }).nullable(),

@@ -52,8 +52,13 @@ export interface QuiltDesign {
   readonly rows: number;
   readonly columns: number;
   readonly blocks: readonly QuiltBlock[];
-  /** Row by row, rows × columns of them (on point: the outer grid; the inner one follows in `inner`). */
+  /**
+   * Row by row, rows × columns of them. On point these are the outer squares, and the inner ones that lie between
+   * them, (rows - 1) × (columns - 1), follow in the same list.
+   */
   readonly cells: readonly QuiltCell[];
+  /** On point: what the side and corner triangles are cut from. */
+  readonly settingRole?: RoleId;
   readonly sashing: Sashing | null;
   readonly borders: readonly Border[];
   readonly binding: Binding | null;
