@@ -1,137 +1,128 @@
 import { length } from "../measure/length";
-import type { BoltPlan, BoltPlanInput, KitLength, PlanBolt, PlannedCut } from "../piece/bolt-plan";
+import type { BoltPlan, BoltPlanInput, KitLength, PlanOutcome, PlannedCut } from "../piece/bolt-plan";
 import type { PlanControl } from "../piece/strip-plan";
 import { fail, ok, type Result } from "../result";
-import { cutsOf, laysOf, type BoltLay, type LayRules } from "./bolt-lay";
+import { addCosts, NO_COST } from "./bolt-counts";
+import { canServe, serve, stockOf, type CutAlready, type FabricStock } from "./bolt-fabric";
 
 /** More than any shop holds of one run's fabrics; the plan's work grows with kits × bolts × lengths on a bolt. */
 const MOST_KITS = 2_000;
 const MOST_BOLTS = 4_000;
 
-/** The bolts that may serve one fabric, with all their lays. */
-interface FabricStock {
-  readonly want: KitLength;
-  readonly rules: LayRules;
-  readonly bolts: readonly { readonly bolt: PlanBolt; readonly lays: readonly BoltLay[] }[];
-  readonly most: number;
+export type BoltPlanFault = "no-fabric" | "no-length" | "too-many";
+
+/** Work, never seconds: counts that the tables of one fabric with several lengths may hold, over all its bolts. */
+export interface BoltBudget {
+  readonly nodes: number;
 }
 
 /**
  * Plans a run's lengths onto bolts: first as many kits as were asked for, then the least scrap, then the fewest bolts
- * touched. Each kit takes one length of a fabric, so fabrics meet only in the number of kits: the fewest that any fabric
- * allows. For each fabric the counts per bolt are chosen by dynamic programming over the bolts, which is exact; every
- * plan is optimal unless a person stops it.
+ * touched. Fabrics meet only in the number of kits: the fewest that any fabric allows. For each fabric the counts per bolt are
+ * chosen by dynamic programming over the segments of a bolt and over the bolts, which is exact. Where a kit takes
+ * several lengths of one fabric they come from one lot; then the budget may end the tables early, and the plan is
+ * `feasible` with `mostKits` a bound.
  *
- * @returns `no-fabric` when nothing was asked for, `several-lengths` when a fabric occurs twice, `too-many` with the limits.
+ * @param _solver the plan needs none.
+ * @returns `no-fabric` when nothing was asked for, `no-length` for a length of nothing, `too-many` with the limits.
  */
-export async function planBolts(input: BoltPlanInput, _budget: { readonly nodes: number }, _solver: null, control?: PlanControl): Promise<Result<BoltPlan, "no-fabric" | "several-lengths" | "too-many">> {
+export async function planBolts(input: BoltPlanInput, budget: BoltBudget, _solver?: unknown, control?: PlanControl): Promise<Result<BoltPlan, BoltPlanFault>> {
+  return replanBolts(input, [], budget, control);
+}
+
+/**
+ * Plans the rest of a run at once, when a bolt was short, had a flaw or a cut went wrong. What was cut stays with its kit;
+ * kits that are furthest along are finished first, their lengths of one fabric still from one lot. `kits` of the input and of
+ * the answer count the kits of the whole run; the cuts are only those still to make.
+ *
+ * @param already every length that was cut for this run and is still good.
+ */
+export async function replanBolts(input: BoltPlanInput, already: readonly CutAlready[], budget: BoltBudget, control?: PlanControl): Promise<Result<BoltPlan, BoltPlanFault>> {
   const refusal = refuse(input);
   if (refusal) return refusal;
-  const stocks = input.lengths.map((want) => stockOf(want, input));
-  const mostKits = Math.min(...stocks.map((stock) => stock.most));
-  const kits = Math.min(input.kits, mostKits);
+  const wants = byFabric(input.lengths);
+  const stocks: FabricStock[] = [];
+  for (const [index, each] of wants.entries()) {
+    if (await isStopped(control, index, wants.length)) return ok(emptyPlan(wants));
+    stocks.push(stockOf(each, input, already, budget.nodes));
+  }
+  const served = kitsServed(stocks, input.kits);
+  const mostKits = Math.max(served.size, Math.min(...stocks.map((stock) => stock.allows)));
+  let cost = NO_COST;
   const cuts: PlannedCut[] = [];
-  let scrap = 0;
-  let boltsTouched = 0;
-  for (const [index, stock] of stocks.entries()) {
-    control?.progress?.({ done: index / stocks.length, sentence: `${index} of ${stocks.length} fabrics laid on their bolts.` });
-    const chosen = choose(stock, kits);
-    scrap += chosen.scrap;
-    boltsTouched += chosen.touched;
-    cuts.push(...layCuts(stock, chosen.counts));
+  for (const stock of stocks) {
+    const choice = serve(stock, served);
+    cost = addCosts(cost, choice);
+    cuts.push(...choice.cuts);
   }
   const order = new Map(input.bolts.map((bolt) => [bolt.tag, bolt.shelfOrder]));
-  cuts.sort((a, b) => (order.get(a.bolt) ?? 0) - (order.get(b.bolt) ?? 0) || a.startsAt - b.startsAt);
-  return ok({ status: "optimal", kits, cuts, scrap: length(scrap), boltsTouched, mostKits, ...limits(stocks, input.kits, mostKits) });
+  cuts.sort((a, b) => (order.get(a.bolt) ?? 0) - (order.get(b.bolt) ?? 0) || (a.bolt < b.bolt ? -1 : a.bolt > b.bolt ? 1 : a.startsAt - b.startsAt));
+  const status: PlanOutcome = served.size === Math.min(input.kits, mostKits) ? "optimal" : "feasible";
+  return ok({ status, kits: served.size, cuts, scrap: length(cost.scrap), boltsTouched: cost.touched, mostKits, ...limits(stocks, input.kits, served.size, mostKits) });
 }
 
 function refuse({ kits, lengths, bolts }: BoltPlanInput) {
   if (lengths.length === 0) return fail("no-fabric", "The kit has no fabric to cut.");
+  const empty = lengths.find((each) => each.length <= 0);
+  if (empty) return fail("no-length", `The kit wants a length of nothing of ${empty.name ?? empty.fabric}. Plan its pieces first.`);
   if (!Number.isSafeInteger(kits) || kits < 0 || kits > MOST_KITS || bolts.length > MOST_BOLTS) {
     return fail("too-many", `A plan takes from 0 to ${MOST_KITS} kits and up to ${MOST_BOLTS} bolts; ${kits} kits on ${bolts.length} bolts were asked for.`);
-  }
-  if (new Set(lengths.map((each) => each.fabric)).size < lengths.length) {
-    return fail("several-lengths", "A fabric occurs twice in the kit. Join its lengths into one.");
   }
   return null;
 }
 
-function stockOf(want: KitLength, { bolts, straightening, saleableRemnant }: BoltPlanInput): FabricStock {
-  const rules: LayRules = { length: want.length, straightening, saleableRemnant };
-  const fitting = bolts
-    .filter((bolt) => bolt.fabric === want.fabric && bolt.usableWidth >= want.plannedWidth)
-    .sort((a, b) => a.shelfOrder - b.shelfOrder)
-    .map((bolt) => ({ bolt, lays: laysOf(bolt, rules) }));
-  return { want, rules, bolts: fitting, most: fitting.reduce((sum, each) => sum + each.lays.length - 1, 0) };
+function byFabric(lengths: readonly KitLength[]): KitLength[][] {
+  return [...new Set(lengths.map((each) => each.fabric))].map((fabric) => lengths.filter((each) => each.fabric === fabric));
 }
 
-interface Choice {
-  readonly scrap: number;
-  readonly touched: number;
-  readonly counts: readonly number[];
+async function isStopped(control: PlanControl | undefined, done: number, count: number): Promise<boolean> {
+  if (!control) return false;
+  control.progress?.({ done: done / count, sentence: `${done} of ${count} fabrics laid on their bolts.` });
+  await new Promise<void>((resolve) => setTimeout(resolve, 0));
+  return control.stopped?.() ?? false;
+}
+
+/** What is left of a plan that a person stopped before it had a count for every fabric. */
+function emptyPlan(wants: readonly (readonly KitLength[])[]): BoltPlan {
+  const allows = wants.map(([want]) => ({ fabric: want?.fabric ?? "", kits: 0 }));
+  return { status: "stopped", kits: 0, cuts: [], scrap: length(0), boltsTouched: 0, mostKits: MOST_KITS, allows, limiting: null, reason: "The planning was stopped before the bolts were counted." };
 }
 
 /**
- * How many lengths each bolt gives: best[n] is the least (scrap, bolts touched) of the bolts so far with n lengths on
- * them, and the step remembers what the last bolt gave. O(bolts × kits × lengths on a bolt).
+ * Which kits are made: those with most of their lengths cut first, then by number, each as long as every fabric can still
+ * serve all taken so far.
  */
-function choose({ bolts }: FabricStock, kits: number): Choice {
-  let best: ({ scrap: number; touched: number } | null)[] = [{ scrap: 0, touched: 0 }, ...new Array<null>(kits).fill(null)];
-  const steps: number[][] = [];
-  for (const { lays } of bolts) {
-    const next = new Array<{ scrap: number; touched: number } | null>(kits + 1).fill(null);
-    const step = new Array<number>(kits + 1).fill(0);
-    for (let total = 0; total <= kits; total += 1) {
-      for (const lay of lays) {
-        if (lay.count > total) break;
-        const before = best[total - lay.count];
-        if (!before) continue;
-        const candidate = { scrap: before.scrap + lay.scrap, touched: before.touched + (lay.count > 0 ? 1 : 0) };
-        if (isBetter(candidate, next[total] ?? null)) {
-          next[total] = candidate;
-          step[total] = lay.count;
-        }
-      }
-    }
-    best = next;
-    steps.push(step);
+function kitsServed(stocks: readonly FabricStock[], asked: number): Set<number> {
+  const progress = new Map<number, number>();
+  for (const stock of stocks) {
+    for (const kit of stock.begun.keys()) progress.set(kit, (progress.get(kit) ?? 0) + 1);
   }
-  const end = best[kits];
-  if (!end) throw new Error("More kits were laid out than the bolts allow.");
-  let total = kits;
-  const counts = steps.map(() => 0);
-  for (let index = steps.length - 1; index >= 0; index -= 1) {
-    counts[index] = steps[index]?.[total] ?? 0;
-    total -= counts[index] ?? 0;
-  }
-  return { ...end, counts };
+  const served = new Set<number>();
+  const tryKit = (kit: number) => {
+    served.add(kit);
+    return stocks.every((stock) => canServe(stock, served)) || !served.delete(kit);
+  };
+  const begun = [...progress.keys()].sort((a, b) => (progress.get(b) ?? 0) - (progress.get(a) ?? 0) || a - b);
+  begun.forEach(tryKit);
+  const fresh = Array.from({ length: asked }, (_, index) => index + 1).filter((kit) => !progress.has(kit));
+  // Kits that have nothing yet are all alike: after the first that fails none can go.
+  fresh.every(tryKit);
+  return served;
 }
 
-function isBetter(a: { scrap: number; touched: number }, b: { scrap: number; touched: number } | null): boolean {
-  return b === null || a.scrap < b.scrap || (a.scrap === b.scrap && a.touched < b.touched);
-}
-
-function layCuts({ bolts, rules }: FabricStock, counts: readonly number[]): PlannedCut[] {
-  let kit = 1;
-  return bolts.flatMap(({ bolt }, index) => {
-    const count = counts[index] ?? 0;
-    const cuts = count > 0 ? cutsOf(bolt, rules, count, kit) : [];
-    kit += count;
-    return cuts;
-  });
-}
-
-function limits(stocks: readonly FabricStock[], asked: number, mostKits: number): Pick<BoltPlan, "allows" | "limiting" | "reason"> {
-  const allows = stocks.map((stock) => ({ fabric: stock.want.fabric, kits: stock.most }));
-  const tightest = stocks.find((stock) => stock.most === mostKits);
-  const name = tightest?.want.name ?? tightest?.want.fabric ?? "";
-  const limiting = tightest ? tightest.want.fabric : null;
-  if (mostKits > asked) return { allows, limiting, reason: `The bolts would allow ${mostKits}; ${name} allows the fewest.` };
-  if (tightest && tightest.bolts.length === 0) return { allows, limiting, reason: `No bolt of ${name} on the shelf is wide enough and has cloth left.` };
-  return { allows, limiting, reason: `${name} limits the run to ${counted(mostKits)}: none of its bolts has room for one more length between its flaws and what is promised.` };
+function limits(stocks: readonly FabricStock[], asked: number, made: number, mostKits: number): Pick<BoltPlan, "allows" | "limiting" | "reason"> {
+  const allows = stocks.map((stock) => ({ fabric: stock.fabric, kits: stock.allows }));
+  const tightest = stocks.reduce((least, stock) => (stock.allows < least.allows ? stock : least));
+  const answer = (reason: string) => ({ allows, limiting: tightest.fabric, reason });
+  const { name } = tightest;
+  if (made === asked && mostKits > asked) return answer(`The bolts would allow ${tightest.isBound ? "up to " : ""}${mostKits}; ${name} allows the fewest.`);
+  if (tightest.bolts === 0) return answer(`No bolt of ${name} is on the shelf.`);
+  if (tightest.wideEnough === 0) return answer(`No bolt of ${name} on the shelf is as wide as its pieces were planned on. Plan the kit anew on the width there is.`);
+  if (made < mostKits) return answer(`${counted(made)} can be made; whether the bolts allow more, up to ${mostKits}, was not proven.`);
+  const room = tightest.groups.length > 1 || tightest.groups[0]?.lot ? "no lot of it has room for one more kit's lengths" : "none of its bolts has room for one more length";
+  return answer(`${name} limits the run to ${counted(mostKits)}: ${room} between the flaws and beside what is promised.`);
 }
 
 function counted(kits: number): string {
   return kits === 1 ? "1 kit" : `${kits} kits`;
 }
-
