@@ -6,7 +6,7 @@ import { addCosts, NO_COST } from "./bolt-counts";
 import { canServe, serve, stockOf, type CutAlready, type FabricStock } from "./bolt-fabric";
 
 /** More than any shop holds of one run's fabrics; the plan's work grows with kits × bolts × lengths on a bolt. */
-const MOST_KITS = 2_000;
+export const MOST_KITS = 2_000;
 const MOST_BOLTS = 4_000;
 
 export type BoltPlanFault = "no-fabric" | "no-length" | "too-many";
