@@ -14,19 +14,23 @@ const NOMINAL = { module: 0.33, height: 22.85, magnifications: [0.8, 1, 2] };
 const WIDTHS_IN_SYMBOL = 6;
 const WIDTHS_IN_STOP = 7;
 
+/** `raw` takes Code 128 values as they are; the encoder knows the option, its types do not. */
+function widthsOf(text: string): number[] {
+  const options = { bcid: "code128", text, raw: true };
+  const [symbol] = bwip.raw(options);
+  if (!symbol || !("sbs" in symbol)) throw new Error("Code 128 came without its bars");
+  return [...symbol.sbs];
+}
+
 /** Bar widths of the check symbol that the labels' own encoder sets behind these Code 128 values. */
 function checkSymbol(start: number, values: readonly number[]): number[] {
   const text = [start, ...values].map((value) => `^${String(value).padStart(3, "0")}`).join("");
-  const [symbol] = bwip.raw({ bcid: "code128", text, raw: true });
-  if (!symbol || !("sbs" in symbol)) throw new Error("Code 128 came without its bars");
-  return [...symbol.sbs].slice(-WIDTHS_IN_SYMBOL - WIDTHS_IN_STOP, -WIDTHS_IN_STOP);
+  return widthsOf(text).slice(-WIDTHS_IN_SYMBOL - WIDTHS_IN_STOP, -WIDTHS_IN_STOP);
 }
 
 /** Bar widths of one Code 128 value, as it is set first behind the start. */
 function symbolOf(start: number, value: number): number[] {
-  const [symbol] = bwip.raw({ bcid: "code128", text: `^${start}^${String(value).padStart(3, "0")}`, raw: true });
-  if (!symbol || !("sbs" in symbol)) throw new Error("Code 128 came without its bars");
-  return [...symbol.sbs].slice(WIDTHS_IN_SYMBOL, 2 * WIDTHS_IN_SYMBOL);
+  return widthsOf(`^${start}^${String(value).padStart(3, "0")}`).slice(WIDTHS_IN_SYMBOL, 2 * WIDTHS_IN_SYMBOL);
 }
 
 function numbers(value: unknown): number[] {

@@ -44,14 +44,14 @@ export function parseGtin(text: string): Result<Gtin, GtinFault> {
   if (!/^\d+$/.test(said)) return fail("not-a-gtin", `“${text.trim().slice(0, 40)}” is not the number of a barcode. Wanted: figures only.`);
   if (!LENGTHS.includes(said.length)) return fail("not-a-gtin", `${said} has ${said.length} figures. Wanted: 8, 12, 13 or 14, as they stand under the bars.`, { facts: { length: said.length } });
   if (gs1CheckDigit(said.slice(0, -1)) !== Number(said.at(-1))) return fail("wrong-check", `${said} has a slip in it: its last figure does not fit. Scan it, or type it again.`);
-  return ok({ digits: said, key: said.padStart(KEY_LENGTH, "0"), use: useOf(said) });
+  return ok({ digits: said, key: said.padStart(KEY_LENGTH, "0"), use: givenOutAs(said) });
 }
 
 /**
  * Restricted circulation: GTIN-8 that begin with 0 or 2, and prefixes 020 to 029, 040 to 049 and 200 to 299 (GS1 General
  * Specifications, "GS1 prefixes"). 050 to 059, 981 to 984 and 99 are coupons, 980 refund slips.
  */
-function useOf(digits: string): GtinUse {
+function givenOutAs(digits: string): GtinUse {
   if (digits.length === 8) return /^[02]/.test(digits) ? "in-store" : "global";
   const prefix = digits.padStart(KEY_LENGTH, "0").slice(1, 4);
   if (/^(?:02|04|2)/.test(prefix)) return "in-store";

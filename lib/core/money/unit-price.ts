@@ -1,8 +1,10 @@
-import { PER_METRE, PER_YARD } from "../measure/length";
 import { exponentOf } from "./currency";
 import { minor, type Minor } from "./money";
 
 declare const unitPriceBrand: unique symbol;
+
+/** Lengths come as whole numbers of 1/160 mm; money knows no more of them than how many make a yard or a metre. */
+const UNITS_PER = { yard: 146_304, metre: 160_000 } as const;
 
 /** An integer count of 1/10 000 of the major unit, per yard or metre (or per piece): 12.40 a yard is 124 000. */
 export type UnitPrice = number & { readonly [unitPriceBrand]: "UnitPrice" };
@@ -22,8 +24,8 @@ export function unitPriceOf(minorUnits: number, currency: string): UnitPrice {
  *
  * @param length in 1/160 mm.
  */
-export function lineTotal(price: UnitPrice | number, length: number, per: "yard" | "metre", currency: string): Minor {
-  return roundedQuotient(BigInt(price) * BigInt(length), BigInt(per === "yard" ? PER_YARD : PER_METRE) * fromTenThousandths(currency));
+export function lineTotal(price: UnitPrice | number, length: number, per: keyof typeof UNITS_PER, currency: string): Minor {
+  return roundedQuotient(BigInt(price) * BigInt(length), BigInt(UNITS_PER[per]) * fromTenThousandths(currency));
 }
 
 /** What a count of pieces costs, rounded once, half up. */
