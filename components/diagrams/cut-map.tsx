@@ -86,7 +86,7 @@ interface MapStripProps extends CutMapProps {
   readonly fill: string;
 }
 
-/** Cloth under the sub-cuts, the rest of the strip bare; letters where a run of equal pieces begins. */
+/** Cloth, veiled so that the cuts are seen on a dark print, under the sub-cuts; the rest of the strip bare; letters where a run of equal pieces begins. */
 function MapStrip({ strip, index, map, fill, blanks, pieces = [] }: MapStripProps) {
   const boxes = strip.cuts.map((cut) => ({ cut, x: map.x(strip.startsAt), y: map.y(cut.at), width: cut.along * map.scale, height: cut.across * map.scale }));
   const lines = boxes.map(({ cut, x, y, width, height }) => {
@@ -99,7 +99,10 @@ function MapStrip({ strip, index, map, fill, blanks, pieces = [] }: MapStripProp
   return (
     <g data-strip={index + 1}>
       {boxes.map(({ cut, x, y, width, height }) => (
-        <rect key={cut.at} data-cut={cut.blank} x={px(x)} y={px(y)} width={px(width)} height={px(height)} fill={fill} stroke={INK} strokeWidth=".9" />
+        <rect key={cut.at} data-cut={cut.blank} x={px(x)} y={px(y)} width={px(width)} height={px(height)} fill={fill} />
+      ))}
+      {boxes.map(({ cut, x, y, width, height }) => (
+        <rect key={cut.at} x={px(x)} y={px(y)} width={px(width)} height={px(height)} fill={PAPER} fillOpacity=".45" stroke={INK} strokeWidth=".9" />
       ))}
       <path d={lines.join("")} stroke={INK} strokeWidth=".9" fill="none" />
       <path data-mark="strip-edge" d={`M${px(map.x(strip.startsAt + strip.width))} ${MAP_TOP}V${px(MAP_TOP + map.across)}${index === 0 && map.start > 0 ? `M${px(map.x(0))} ${MAP_TOP}V${px(MAP_TOP + map.across)}` : ""}`} stroke={INK} strokeWidth="1.5" />
@@ -178,7 +181,7 @@ function FootDims({ runs, plan, map, system }: { readonly runs: readonly StripRu
           </Dimension>
         ) : null;
       })}
-      {rest > 0 && rest * map.scale >= textWidth(restWords, 13) ? (
+      {rest > 0 && rest * map.scale >= textWidth(restWords, 13) * 0.7 ? (
         <text x={px(end)} y={px(y + 4.6)} textAnchor="end" style={figureStyle(13)}>
           {restWords}
         </text>

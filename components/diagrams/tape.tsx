@@ -139,13 +139,13 @@ function CutNow({ cut, left, frame }: { readonly cut: TapeBand; readonly left: n
   );
 }
 
-function Figures({ figures = false, putUp, left, max, system, frame }: Framed) {
+function Figures({ figures = false, putUp, left, max, width, system, frame }: Framed) {
   if (!figures) return null;
   const unit = unitOf(system);
   const step = figureStep(frame.scale, system, frame.size * 2);
   const last = Math.min(max, Math.max(putUp, left));
   return Array.from({ length: Math.floor(last / unit / step + 1e-9) + 1 }, (_, index) => index * step).map((figure) => (
-    <text key={figure} x={px(frame.x(figure * unit))} y={px(frame.height - 4)} textAnchor={figure === 0 ? "start" : "middle"} style={figureStyle(frame.size, 560)}>
+    <text key={figure} x={px(frame.x(figure * unit))} y={px(frame.height - 4)} textAnchor={figure === 0 ? "start" : frame.x(figure * unit) > width - frame.size * 0.6 ? "end" : "middle"} style={figureStyle(frame.size, 560)}>
       {figure}
     </text>
   ));
