@@ -89,3 +89,8 @@ export function cutLongStrip(head: PieceHead, width: CutSize, needed: number, jo
     mayTurn: false,
   };
 }
+
+/** The length that goes round the quilt: its perimeter and the extra for corners and the last join, in 1/160 mm. */
+export function bindingLength({ width, height }: { readonly width: number; readonly height: number }, extra: number): number {
+  return 2 * (width + height) + extra;
+}
