@@ -20,6 +20,8 @@ export interface BackingSize {
   readonly height: number;
   /** On every side. */
   readonly overhang: Length;
+  /** A print with a direction stands upright on the back, so its joins can only run down. */
+  readonly oneWay?: boolean;
 }
 
 /**
@@ -35,6 +37,7 @@ export function backingPanels(size: BackingSize, usableWidth: Length, seamAllowa
   if (usableWidth <= 2 * seamAllowance) throw new RangeError("A fabric is wider than the seams that join it.");
   const [across, down] = [size.width + 2 * size.overhang, size.height + 2 * size.overhang];
   const seamsDown = panelsFor(across, down, "down", { usableWidth, seamAllowance, step });
+  if (size.oneWay) return seamsDown;
   const seamsAcross = panelsFor(down, across, "across", { usableWidth, seamAllowance, step });
   const better = seamsAcross.length - seamsDown.length || seamsAcross.panels - seamsDown.panels;
   return better < 0 ? seamsAcross : seamsDown;
