@@ -1,6 +1,6 @@
 import { useId } from "react";
 import type { ClothTile } from "@/components/ui/cloth";
-import { displayMeasure, wordsOfInches, wordsOfLength, type MeasureSystem } from "@/lib/core/measure/format";
+import { displayInches, displayMeasure, formatCentimetres, wordsOfInches, wordsOfLength, type MeasureSystem } from "@/lib/core/measure/format";
 import { PER_CENTIMETRE } from "@/lib/core/measure/length";
 import type { CutPiece } from "@/lib/core/piece/cut-piece";
 import type { Blank, Strip, StripPlan, WasteAllowance } from "@/lib/core/piece/strip-plan";
@@ -169,7 +169,7 @@ function FootDims({ runs, plan, map, system }: { readonly runs: readonly StripRu
   const y = MAP_TOP + map.across + 15;
   const rest = map.cutLength - map.start - plan.length;
   const end = MAP_LEFT + map.along;
-  const restWords = displayMeasure(rest, system);
+  const restWords = system === "yards" ? displayInches(rest) : formatCentimetres(rest);
   return (
     <g data-mark="dims">
       {runs.map((run, index) => {
@@ -181,7 +181,7 @@ function FootDims({ runs, plan, map, system }: { readonly runs: readonly StripRu
           </Dimension>
         ) : null;
       })}
-      {rest > 0 && rest * map.scale >= textWidth(restWords, 13) * 0.7 ? (
+      {rest > 0 && rest * map.scale >= textWidth(restWords, 13) + 4 ? (
         <text x={px(end)} y={px(y + 4.6)} textAnchor="end" style={figureStyle(13)}>
           {restWords}
         </text>

@@ -5,6 +5,7 @@ import { blockScale } from "@/components/diagrams/block-scale";
 import { PatchDiagram } from "@/components/diagrams/patch-diagram";
 import { middleOf } from "@/components/diagrams/patch-middle";
 import { QuiltDiagram } from "@/components/diagrams/quilt-diagram";
+import { RoleKey } from "@/components/diagrams/role-key";
 import { seamLines } from "@/components/diagrams/seam-lines";
 import { inches } from "@/lib/core/measure/length";
 import type { Role } from "@/lib/core/piece/drawing";
@@ -127,5 +128,13 @@ describe("a quilt", () => {
     expect(markup).toMatch(/<pattern id="quilt-[^"]*-cloth-0"[^>]*patternTransform="scale\(0.35\)"/);
     expect(labelOf(markup)).toBe("A small quilt.");
     expect(elements(markup, "rect", { "data-mark": "binding" })).toHaveLength(1);
+  });
+});
+
+describe("the key of a drawing's roles", () => {
+  it("names every role, with its fabric where it has one and its value where it has none", () => {
+    const markup = renderToStaticMarkup(<RoleKey roles={ROLES} cloth={{ wheel: FERRY }} said={{ wheel: "Midnight Ferry, lot 7731" }} />);
+    expect(markup.replaceAll(/<[^>]*>/g, "|").split("|").filter(Boolean)).toEqual(["Sky, light", "Sea, light", "Wheel: Midnight Ferry, lot 7731"]);
+    expect(markup.match(/<pattern id="key-[^"]*-role-/g)).toHaveLength(2);
   });
 });
