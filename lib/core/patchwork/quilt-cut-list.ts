@@ -56,7 +56,7 @@ function finishing(design: QuiltDesign, layout: QuiltLayout, rules: CuttingRules
   const { binding, backing } = design;
   const lines: CutPiece[] = [];
   if (binding) {
-    const head = { key: `binding/${binding.role}`, letter: "Binding", name: `Binding, ${sizeName(binding.stripWidth)} strips joined on the bias`, role: binding.role };
+    const head = { key: `binding/${binding.role}`, letter: "Binding", name: `Binding, ${sizeName(binding.stripWidth, options.system)} strips joined on the bias`, role: binding.role };
     lines.push(cutLongStrip(head, { exact: binding.stripWidth, ruler: binding.stripWidth }, bindingLength(layout, binding.extra), "bias", rules));
   }
   if (backing) {
@@ -76,7 +76,7 @@ function widthOf(options: QuiltCutOptions, role: RoleId) {
 
 function narrowFault({ backing }: QuiltDesign, rules: CuttingRules, options: QuiltCutOptions): string | null {
   if (!backing || widthOf(options, backing.role) > 4 * rules.seamAllowance) return null;
-  return `The backing's fabric is ${sizeName(widthOf(options, backing.role))} wide, which its own seams would use up.`;
+  return `The backing's fabric is ${sizeName(widthOf(options, backing.role), options.system)} wide, which its own seams would use up.`;
 }
 
 /** A, B … Z, AA, AB …: the next one each time, after the last that is taken. */

@@ -1,4 +1,4 @@
-import { formatExactInches, formatInches, isOnThirtySecond } from "../measure/format";
+import { formatCentimetres, formatExactInches, formatInches, isOnThirtySecond, type MeasureSystem } from "../measure/format";
 import { inches, length, type Length } from "../measure/length";
 import type { CutPiece, CuttingRules } from "../piece/cut-piece";
 import type { RoleId } from "../piece/drawing";
@@ -13,6 +13,8 @@ export interface QuiltCutOptions {
   readonly usableWidth?: (role: RoleId) => Length;
   /** Borders out of strips across the fabric, joined where they must be, or whole and along the selvage. */
   readonly borders?: "across" | "along";
+  /** How sizes are said in the pieces' names; inches where nothing is said. */
+  readonly system?: MeasureSystem;
   /** Added to the squares of setting triangles and trimmed off the quilt; nothing where it is not said. */
   readonly settingOversize?: Length;
 }
@@ -22,7 +24,7 @@ export const USUAL_WIDTH: Length = inches(40);
 
 /** Everything of the layout but the blocks' patches, as cut lines: small squares first, borders last. Letters from `letters`. */
 export function settingPieces(pieces: readonly QuiltPiece[], rules: CuttingRules, options: QuiltCutOptions, letters: () => string): CutPiece[] {
-  const cutter = { rules, options, letters, oneWay: new Set(options.oneWay ?? []) };
+  const cutter = { rules, options, letters, oneWay: new Set(options.oneWay ?? []), say: (units: number) => sizeName(units, options.system) };
   return [
     ...cornerstones(pieces, cutter),
     ...shortSashing(pieces, cutter),
@@ -38,6 +40,7 @@ interface Cutter {
   readonly options: QuiltCutOptions;
   readonly letters: () => string;
   readonly oneWay: ReadonlySet<RoleId>;
+  readonly say: (units: number) => string;
 }
 
 type Kind = QuiltPiece["source"]["kind"];
@@ -45,11 +48,11 @@ type Kind = QuiltPiece["source"]["kind"];
 function cornerstones(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[] {
   const lines = byRole(pieces, "cornerstone").map(([role, group]) => {
     const side = shortSide(group[0]);
-    return cutRectangle({ key: `cornerstone/${role}`, letter: cutter.letters(), name: `Cornerstone, ${sizeName(side)}`, role }, { along: side, across: side }, group.length, !cutter.oneWay.has(role), cutter.rules);
+    return cutRectangle({ key: `cornerstone/${role}`, letter: cutter.letters(), name: `Cornerstone, ${cutter.say(side)}`, role }, { along: side, across: side }, group.length, !cutter.oneWay.has(role), cutter.rules);
   });
   const halved = byRole(pieces, "half-cornerstone").map(([role, group]) => {
     const long = longSide(group[0]);
-    const head = { key: `half-cornerstone/${role}`, letter: cutter.letters(), name: `Half cornerstone at the edge, ${sizeName(long)} long side`, role };
+    const head = { key: `half-cornerstone/${role}`, letter: cutter.letters(), name: `Half cornerstone at the edge, ${cutter.say(long)} long side`, role };
     return edgeTriangles(head, long, group, cutter, length(0));
   });
   return [...lines, ...halved];
@@ -65,7 +68,7 @@ function shortSashing(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[]
     const [first, width, long] = [group[0], shortSide(group[0]), longSide(group[0])];
     const oneWay = cutter.oneWay.has(first.role);
     const down = oneWay && first.source.kind === "sashing" && first.source.lies === "down";
-    const head = { key, letter: cutter.letters(), name: `Sashing${down ? ", print along it" : oneWay ? ", print across it" : ""}, ${sizeName(width)} × ${sizeName(long)}`, role: first.role };
+    const head = { key, letter: cutter.letters(), name: `Sashing${down ? ", print along it" : oneWay ? ", print across it" : ""}, ${cutter.say(width)} × ${cutter.say(long)}`, role: first.role };
     return cutRectangle(head, down ? { along: long, across: width } : { along: width, across: long }, group.length, !oneWay, cutter.rules);
   });
 }
@@ -73,7 +76,7 @@ function shortSashing(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[]
 function plainSquares(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[] {
   return byRole(pieces, "plain").map(([role, group]) => {
     const [across, along] = [edge(group[0].polygon, 0), edge(group[0].polygon, 1)];
-    const name = `Alternate plain ${Math.abs(across - along) < 1 ? `square, ${sizeName(across)}` : `rectangle, ${sizeName(across)} × ${sizeName(along)}`}`;
+    const name = `Alternate plain ${Math.abs(across - along) < 1 ? `square, ${cutter.say(across)}` : `rectangle, ${cutter.say(across)} × ${cutter.say(along)}`}`;
     return cutRectangle({ key: `plain/${role}`, letter: cutter.letters(), name, role }, { along, across }, group.length, !cutter.oneWay.has(role), cutter.rules);
   });
 }
@@ -82,11 +85,11 @@ function triangles(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[] {
   const oversize = cutter.options.settingOversize ?? length(0);
   const sides = byRole(pieces, "setting-triangle").map(([role, group]) => {
     const long = longSide(group[0]);
-    return edgeTriangles({ key: `setting-triangle/${role}`, letter: cutter.letters(), name: `Setting triangle, ${sizeName(long)} long side`, role }, long, group, cutter, oversize);
+    return edgeTriangles({ key: `setting-triangle/${role}`, letter: cutter.letters(), name: `Setting triangle, ${cutter.say(long)} long side`, role }, long, group, cutter, oversize);
   });
   const corners = byRole(pieces, "corner-triangle").map(([role, group]): CutPiece => {
     const short = longSide(group[0]) / Math.SQRT2;
-    const head = { key: `corner-triangle/${role}`, letter: cutter.letters(), name: `Corner triangle, ${sizeName(short)} short sides`, role };
+    const head = { key: `corner-triangle/${role}`, letter: cutter.letters(), name: `Corner triangle, ${cutter.say(short)} short sides`, role };
     const line = cutHalfSquare(head, short, group.length, !cutter.oneWay.has(role), cutter.rules, oversize);
     return cutter.oneWay.has(role) ? { ...line, note: "One-way print: cut the two squares from opposite corners, one each way." } : line;
   });
@@ -123,7 +126,7 @@ function borders(pieces: readonly QuiltPiece[], cutter: Cutter): CutPiece[] {
   });
   const corners = grouped(ofKind(pieces, "border-corner"), ({ role, source }) => `border-corner-${source.kind === "border-corner" ? source.border + 1 : ""}/${role}`).map(([key, group]) => {
     const [role, side] = [group[0].role, shortSide(group[0])];
-    return cutRectangle({ key, letter: cutter.letters(), name: `Border corner, ${sizeName(side)}`, role }, { along: side, across: side }, group.length, !cutter.oneWay.has(role), cutter.rules);
+    return cutRectangle({ key, letter: cutter.letters(), name: `Border corner, ${cutter.say(side)}`, role }, { along: side, across: side }, group.length, !cutter.oneWay.has(role), cutter.rules);
   });
   return [...lines, ...corners];
 }
@@ -147,12 +150,12 @@ function longPieces(head: PieceHead, group: readonly QuiltPiece[], cutter: Cutte
   if (way === "along" || (!slanted && group.every((piece) => whole(longSide(piece))))) {
     return grouped(group, (piece) => String(Math.round(longSide(piece)))).map(([key, same]) => {
       const long = longSide(same[0]);
-      const sized = { ...head, key: `${head.key}/${key}`, name: `${head.name}, ${sizeName(width)} × ${sizeName(long)}` };
+      const sized = { ...head, key: `${head.key}/${key}`, name: `${head.name}, ${cutter.say(width)} × ${cutter.say(long)}` };
       return cutRectangle(sized, way === "along" ? { along: long, across: width } : { along: width, across: long }, same.length, turnable, rules);
     });
   }
   const needed = group.reduce((total, piece) => total + longSide(piece) + seams, 0);
-  return [cutLongStrip({ ...head, name: `${head.name}, ${sizeName(width)} wide` }, sewnAsCut(width, rules), needed, "straight", rules)];
+  return [cutLongStrip({ ...head, name: `${head.name}, ${cutter.say(width)} wide` }, sewnAsCut(width, rules), needed, "straight", rules)];
 }
 
 /** The ends of a strip are square when its shorter sides are as long as it is broad. */
@@ -218,8 +221,9 @@ export function areaOf(polygon: Polygon): number {
   return Math.abs(doubled) / 2;
 }
 
-/** "3 in", "12 1/2 in"; what lies between the marks as a decimal: "4.243 in". */
-export function sizeName(units: number): string {
+/** "3 in", "12 1/2 in", "7.5 cm"; what lies between the marks of an inch ruler as a decimal: "4.243 in". */
+export function sizeName(units: number, system: MeasureSystem = "yards"): string {
+  if (system === "metres") return `${formatCentimetres(units)} cm`;
   const whole = Math.round(units);
   const onMark = Math.abs(units - whole) < 1e-6 && isOnThirtySecond(whole);
   return `${onMark ? formatInches(whole) : formatExactInches(units)} in`;

@@ -125,6 +125,15 @@ describe("a quilt on point", () => {
   });
 });
 
+describe("names", () => {
+  it("say sizes in inches, between the marks as a decimal, or in centimetres", () => {
+    const design = { setting: "on-point", rows: 2, columns: 2, borders: [{ width: inches(2), role: "edge", corners: "post" }] } as const;
+    const names = (options?: QuiltCutOptions) => cut(design, options).map((piece) => piece.name).slice(-4);
+    expect(names()).toEqual(["Setting triangle, 8.485 in long side", "Corner triangle, 4.243 in short sides", "Border, 2 in × 16.971 in", "Border corner, 2 in"]);
+    expect(names({ system: "metres" })).toContain("Corner triangle, 10.8 cm short sides");
+  });
+});
+
 describe("long pieces", () => {
   it("are whole where they fit across the fabric, and one joined run where they do not", () => {
     const borders = [{ width: inches(2), role: "edge", corners: null }];
