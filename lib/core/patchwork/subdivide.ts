@@ -1,6 +1,6 @@
 import type { Drawing, ExactPoint } from "../piece/drawing";
 import { fail, ok, type Result } from "../result";
-import { add, compare, divide, isZero, multiply, ONE, rational, sign, toNumber, ZERO } from "./exact";
+import { add, compare, divide, isZero, multiply, ONE, rational, sign, toNumber, ZERO, type Exact } from "./exact";
 import { alongOrder, cross, formatPoint, keyOf, minus, parsePoint, samePoint, sideOf, type Vector } from "./exact-point";
 import { traceFaces } from "./trace-faces";
 
@@ -132,10 +132,16 @@ function withoutStraightPoints(face: readonly Vector[]): Vector[] {
   });
 }
 
-/** By the top, then the left of the face's middle (the mean of its corners), as a page is read. */
+/** As a page is read: by the highest corner, then the leftmost, then the middle (the mean of the corners). */
 function byReading(a: readonly Vector[], b: readonly Vector[]): number {
   const [p, q] = [middleOf(a), middleOf(b)];
-  return compare(p.y, q.y) || compare(p.x, q.x);
+  return (
+    compare(least(a, "y"), least(b, "y")) || compare(least(a, "x"), least(b, "x")) || compare(p.y, q.y) || compare(p.x, q.x)
+  );
+}
+
+function least(face: readonly Vector[], axis: "x" | "y"): Exact {
+  return face.map((point) => point[axis]).reduce((low, value) => (compare(value, low) < 0 ? value : low));
 }
 
 function middleOf(face: readonly Vector[]): Vector {

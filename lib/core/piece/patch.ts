@@ -11,7 +11,7 @@ export type Polygon = readonly PlanePoint[];
 
 /** One face of the drawing. */
 export interface Patch {
-  /** Index in reading order: by the top, then the left of the patch's centre. */
+  /** Index in reading order: by the highest corner, then the leftmost. */
   readonly index: number;
   /** Exact corners as fractions of the block, clockwise on the screen, straight-through points removed. */
   readonly outline: readonly ExactPoint[];
