@@ -29,13 +29,22 @@ export function blockCutList({ patches }: Pick<BlockAnalysis, "patches">, _size:
   for (const patch of patches) {
     if (patch.role === null) continue;
     const directed = oneWay.has(patch.role);
-    const lying = toOrigin(turned(patch.corners, GRAIN_TURN[patch.grain]));
+    const lying = asCut(patch, directed);
     const made = methodOf(lying, rules);
     const key = `${patch.letter}/${patch.role}/${wayOf(patch, made, directed)}`;
     const known = lines.get(key);
     lines.set(key, known ? { ...known, count: known.count + copies } : pieceOf(patch, { key, role: patch.role, lying, made, rules, copies, directed, system }));
   }
   return [...lines.values()].sort((a, b) => byLetter(a.letter, b.letter) || (a.role < b.role ? -1 : a.role > b.role ? 1 : a.key < b.key ? -1 : 1));
+}
+
+/**
+ * The finished shape with its grain up the page. Where neither direction nor grain matters, all patches of a letter are
+ * shown in its model's pose, as long as that leaves the straight sides straight.
+ */
+function asCut({ corners, grain, turn }: Patch, directed: boolean): Polygon {
+  const free = !directed && grain === "any" && normalTurn(turn) % 90 === 0;
+  return toOrigin(turned(corners, free ? -turn : GRAIN_TURN[grain]));
 }
 
 interface Line {
