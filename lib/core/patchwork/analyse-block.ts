@@ -48,9 +48,11 @@ export function analyseBlock(drawing: Drawing, size: BlockSize, system: MeasureS
   if (!paints.ok) return paints;
   const lettered = letterFaces(faces, size);
   const patches = faces.map((face, index): Patch => {
-    const { letter, turn } = lettered.faces[index] ?? { letter: "?", turn: 0 };
+    const { letter, turn, start } = lettered.faces[index] ?? { letter: "?", turn: 0, start: 0 };
     const paint = paints.value[index];
-    return { index, outline: outlineOf(face), corners: cornersOf(face, size), letter, role: paint?.role ?? null, grain: paint?.grain ?? "any", turn };
+    // Patches of one letter begin at the same corner of it.
+    const ordered = [...face.slice(start), ...face.slice(0, start)];
+    return { index, outline: outlineOf(ordered), corners: cornersOf(ordered, size), letter, role: paint?.role ?? null, grain: paint?.grain ?? "any", turn };
   });
   const shapes = [...lettered.models].map(([letter, { model, symmetric }]): Shape => ({
     letter,
@@ -86,7 +88,7 @@ interface Model {
 }
 
 interface Lettered {
-  readonly faces: readonly { readonly letter: string; readonly turn: number }[];
+  readonly faces: readonly { readonly letter: string; readonly turn: number; readonly start: number }[];
   readonly models: ReadonlyMap<string, Model>;
 }
 
@@ -108,7 +110,7 @@ function letterFaces(faces: readonly (readonly Vector[])[], size: BlockSize): Le
     const direction = directionOf(sidesOf(corners)[signature.start] ?? [1, 0]);
     const model = models.get(letter) ?? modelOf(corners, signature, direction);
     models.set(letter, model);
-    return { letter, turn: normalTurn(direction - model.direction) };
+    return { letter, turn: normalTurn(direction - model.direction), start: signature.start };
   });
   return { faces: out, models };
 }
