@@ -7,12 +7,13 @@ export default defineConfig({
   resolve: { alias },
   test: {
     projects: [
-      { resolve: { alias }, test: { name: "unit", include: ["tests/unit/**/*.test.ts", "tests/unit/**/*.test.tsx"], testTimeout: 30_000 } },
-      { resolve: { alias }, test: { name: "reference", include: ["tests/reference/**/*.test.ts"], testTimeout: 60_000 } },
+      { resolve: { alias }, test: { name: "unit", sequence: { groupOrder: 0 }, include: ["tests/unit/**/*.test.ts", "tests/unit/**/*.test.tsx"], testTimeout: 30_000 } },
+      { resolve: { alias }, test: { name: "reference", sequence: { groupOrder: 0 }, include: ["tests/reference/**/*.test.ts"], testTimeout: 60_000 } },
       {
         resolve: { alias },
         test: {
           name: "db",
+          sequence: { groupOrder: 1 },
           include: ["tests/db/**/*.test.ts"],
           globalSetup: ["tests/db/global-setup.ts"],
           testTimeout: 60_000,

@@ -49,7 +49,8 @@ async function runJob(planner: Planner, job: TakenJob): Promise<void> {
 }
 
 function startWorker(planner: Planner): Worker {
-  const worker = new Worker(path.resolve(process.cwd(), environment().PLANNER_WORKER));
+  // The bundler would look for the file while it builds; it is made beside the pages and found when it runs.
+  const worker = new Worker(/* turbopackIgnore: true */ path.resolve(process.cwd(), environment().PLANNER_WORKER));
   worker.unref();
   worker.once("exit", () => {
     if (planner.worker === worker) planner.worker = null;
