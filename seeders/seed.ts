@@ -1,5 +1,5 @@
 import type { Actor } from "../lib/core/policy/policy";
-import { closeDb, db, makeDb, useDb } from "../models/database";
+import { closeDb, db, makeDb, useDb as workOn } from "../models/database";
 import { seedBlocks } from "./seed-blocks";
 import { seedKits } from "./seed-kits";
 import { seedShop } from "./seed-shop";
@@ -10,7 +10,7 @@ import { seedStock } from "./seed-stock";
  * left as it is, and every request is answered once.
  */
 export async function seedDemo(url: string): Promise<void> {
-  useDb(makeDb(url, { pool: 4 }));
+  workOn(makeDb(url, { pool: 4 }));
   try {
     await seedShop();
     const owner = await actorOf("owner");
