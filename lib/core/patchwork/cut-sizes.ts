@@ -38,7 +38,37 @@ export function diamondStrip(finishedHeight: number, seam: number): number {
   return finishedHeight + 2 * seam;
 }
 
-/** The side of a regular octagon that fills a square, and of the triangles at its corners: side / (2 + √2). */
+/** The square for four flying geese at once, one for their large triangles: a quarter-square on the goose's long side. */
+export function flyingGeeseLargeSquare(finishedLongSide: number, seam: number): number {
+  return quarterSquareCut(finishedLongSide, seam);
+}
+
+/** The four squares for the small triangles of four flying geese at once: half-squares on half the goose's long side. */
+export function flyingGeeseSmallSquare(finishedLongSide: number, seam: number): number {
+  return halfSquareCut(finishedLongSide / 2, seam);
+}
+
+/** The square, two of a kind sewn face to face, that gives eight half-square units: two of the half-square's own squares wide. */
+export function eightHalfSquares(finished: number, seam: number): number {
+  return 2 * halfSquareCut(finished, seam);
+}
+
+/** The square cut once for the corners round a square set on point: half-squares whose long side is the square's side. */
+export function squareInSquareCorner(finishedCentre: number, seam: number): number {
+  return halfSquareCut(finishedCentre / Math.SQRT2, seam);
+}
+
+/** The short sides of the triangles at the corners of a regular octagon in a square, and the part of an eight-pointed star: side / (2 + √2). */
 export function octagonCorner(square: number): number {
   return square / (2 + Math.SQRT2);
+}
+
+/** The side of a regular octagon that fills a square: side / (1 + √2). */
+export function octagonSide(square: number): number {
+  return square / (1 + Math.SQRT2);
+}
+
+/** The inner part of a ring of eight round an octagon (Castle Wall): side / (3 + 2√2), the octagon's corner taken of its side once more. */
+export function octagonInnerPart(square: number): number {
+  return square / (3 + 2 * Math.SQRT2);
 }
