@@ -1,5 +1,5 @@
 import path from "node:path";
-import { Worker } from "node:worker_threads";
+import type { Worker } from "node:worker_threads";
 import { endJob, reportProgress, takeJob, type TakenJob } from "@/lib/data/planning/jobs";
 import { environment } from "@/lib/server/environment";
 import type { FromWorker, ToWorker } from "./messages";
@@ -49,8 +49,9 @@ async function runJob(planner: Planner, job: TakenJob): Promise<void> {
 }
 
 function startWorker(planner: Planner): Worker {
-  // The bundler would look for the file while it builds; it is made beside the pages and found when it runs.
-  const worker = new Worker(/* turbopackIgnore: true */ path.resolve(process.cwd(), environment().PLANNER_WORKER));
+  // Asked for at run time, so that the bundler does not look for a file that is made beside the pages.
+  const { Worker: Thread } = process.getBuiltinModule("node:worker_threads");
+  const worker = new Thread(path.resolve(process.cwd(), environment().PLANNER_WORKER));
   worker.unref();
   worker.once("exit", () => {
     if (planner.worker === worker) planner.worker = null;
