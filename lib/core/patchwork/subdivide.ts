@@ -24,6 +24,8 @@ interface Line {
 }
 
 const MOST_SEAMS = 2000;
+/** Pairs of seams that meet. A thousand patches need far fewer; without the limit a hostile drawing keeps a machine busy for minutes. */
+const MOST_MEETINGS = 40_000;
 const CROWDED = 8;
 const CORNERS: readonly Vector[] = [
   { x: ZERO, y: ZERO },
@@ -48,7 +50,9 @@ export function subdivide(drawing: Drawing): Result<Subdivision, "bad-drawing" |
     if (![from.value, to.value].every(isInside)) return fail("bad-drawing", `Seam ${index + 1} leaves the block.`);
     lines.push(lineOf(from.value, to.value));
   }
-  const traced = traceFaces(edgesOf(lines));
+  const edges = edgesOf(lines);
+  if (!edges) return fail("too-large", `The seams meet each other more than ${MOST_MEETINGS} times; a block has at most that many meetings.`);
+  const traced = traceFaces(edges);
   return ok({
     faces: traced.faces.map(withoutStraightPoints).sort(byReading),
     openEnds: traced.openEnds,
@@ -75,14 +79,18 @@ function isInterior(point: Vector): boolean {
   return [point.x, point.y].every((value) => sign(value) > 0 && compare(value, ONE) < 0);
 }
 
-/** Every line cut at every point where another meets it: pieces that meet only at their ends, each once. */
-function edgesOf(lines: readonly Line[]): [Vector, Vector][] {
+/** Every line cut at every point where another meets it: pieces that meet only at their ends, each once. Null past the limit. */
+function edgesOf(lines: readonly Line[]): [Vector, Vector][] | null {
   const stops = lines.map((line) => [line.from, line.to]);
+  let met = 0;
   for (let i = 0; i < lines.length; i += 1) {
     for (let j = i + 1; j < lines.length; j += 1) {
       const [first, second] = [lines[i], lines[j]];
       if (!first || !second || !boxesMeet(first, second)) continue;
-      for (const point of meetings(first, second)) {
+      const points = meetings(first, second);
+      if (points.length > 0) met += 1;
+      if (met > MOST_MEETINGS) return null;
+      for (const point of points) {
         stops[i]?.push(point);
         stops[j]?.push(point);
       }

@@ -54,6 +54,19 @@ describe("cutting a drawing into patches", () => {
     }
   });
 
+  it("gives up on seams that cross a million times, and on more than it may hold", () => {
+    const line = (index: number, level: boolean): Seam => {
+      const place = `${index + 1}/1001`;
+      return level ? { kind: "straight", from: ["0", place], to: ["1", place] } : { kind: "straight", from: [place, "0"], to: [place, "1"] };
+    };
+    const net = Array.from({ length: 2000 }, (_, index) => line(index % 1000, index < 1000));
+    expect(analyseBlock(drawing(net), SIZE)).toMatchObject({ ok: false, fault: { code: "too-large" } });
+    expect(analyseBlock(drawing([...net, line(0, true)]), SIZE)).toMatchObject({ ok: false, fault: { code: "too-large" } });
+    const full = Array.from({ length: 62 }, (_, index) => line(16 * (index % 31), index < 31));
+    expect(analyseBlock(drawing(full.slice(0, 61)), SIZE)).toMatchObject({ ok: true });
+    expect(analyseBlock(drawing(full), SIZE)).toMatchObject({ ok: false, fault: { code: "too-large" } });
+  });
+
   it("covers the block once: areas add up, Euler's formula holds, and every place lies in one patch", () => {
     const place = fc.tuple(fc.integer({ min: 1, max: 996 }), fc.integer({ min: 1, max: 996 }));
     fc.assert(
