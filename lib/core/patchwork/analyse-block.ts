@@ -145,16 +145,21 @@ function complaintsOf(subdivision: Subdivision, patches: readonly Patch[]): Comp
     const at = insideOf(patch);
     if (narrowestWidth(patch.corners) < SLIVER - 1e-6) complaints.push({ code: "sliver", sentence: `Patch ${patch.letter} is narrower than 1/4 in finished.`, at });
     if (patch.role === null) complaints.push({ code: "unpainted", sentence: `Patch ${patch.letter} has no fabric yet.`, at });
-    if (isDiagonal(patch.grain) && touchesEdge(patch)) complaints.push({ code: "bias-edge", sentence: `Patch ${patch.letter} has its bias on the outside edge, where it stretches.`, at });
+    if (hasBiasEdge(patch)) complaints.push({ code: "bias-edge", sentence: `Patch ${patch.letter} has its bias on the outside edge, where it stretches.`, at });
   }
   return [...complaints, ...subdivision.crowded.map((point) => ({ code: "crowded" as const, sentence: "Eight or more seams meet here. Press the last one open.", at: formatPoint(point) }))];
 }
 
-export function isDiagonal(grain: Grain): boolean {
+/** The grain runs aslant and the patch has a side on the outside edge of the block. */
+export function hasBiasEdge(patch: Pick<Patch, "grain" | "outline">): boolean {
+  return isDiagonal(patch.grain) && touchesEdge(patch);
+}
+
+function isDiagonal(grain: Grain): boolean {
   return grain === "down-right" || grain === "down-left";
 }
 
-function touchesEdge({ outline }: Patch): boolean {
+function touchesEdge({ outline }: Pick<Patch, "outline">): boolean {
   return outline.some(([x, y], index) => {
     const [nextX, nextY] = outline[(index + 1) % outline.length] ?? [x, y];
     return (x === nextX && (x === "0" || x === "1")) || (y === nextY && (y === "0" || y === "1"));

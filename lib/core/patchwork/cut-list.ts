@@ -2,7 +2,7 @@ import type { MeasureSystem } from "../measure/format";
 import type { CutPiece, CuttingRules } from "../piece/cut-piece";
 import type { BlockSize, Grain, RoleId } from "../piece/drawing";
 import type { Patch, Polygon } from "../piece/patch";
-import type { BlockAnalysis } from "./analyse-block";
+import { hasBiasEdge, type BlockAnalysis } from "./analyse-block";
 import { growthOf, methodOf, type MethodOfPatch } from "./cut-method";
 import { sayShape } from "./name-shape";
 import { offsetOutwards } from "./offset";
@@ -15,6 +15,8 @@ export interface CutListOptions {
   readonly oneWay?: ReadonlySet<RoleId>;
   readonly system?: MeasureSystem;
 }
+
+const BIAS_EDGE = "Bias lies on the outside edge of the block: handle it little, and stay-stitch it.";
 
 /** How far the shape is turned so that its lengthwise grain runs up the page. */
 const GRAIN_TURN: Readonly<Record<Grain, number>> = { any: 0, up: 0, across: 90, "down-right": 45, "down-left": -45 };
@@ -33,7 +35,8 @@ export function blockCutList({ patches }: Pick<BlockAnalysis, "patches">, _size:
     const made = methodOf(lying, rules);
     const key = `${patch.letter}/${patch.role}/${wayOf(patch, made, directed)}`;
     const known = lines.get(key);
-    lines.set(key, known ? { ...known, count: known.count + copies } : pieceOf(patch, { key, role: patch.role, lying, made, rules, copies, directed, system }));
+    const line = known ? { ...known, count: known.count + copies } : pieceOf(patch, { key, role: patch.role, lying, made, rules, copies, directed, system });
+    lines.set(key, hasBiasEdge(patch) ? { ...line, note: BIAS_EDGE } : line);
   }
   return [...lines.values()].sort((a, b) => byLetter(a.letter, b.letter) || (a.role < b.role ? -1 : a.role > b.role ? 1 : a.key < b.key ? -1 : 1));
 }
