@@ -4,7 +4,7 @@ import type { BlockSize, Grain, RoleId } from "../piece/drawing";
 import type { Patch, Polygon } from "../piece/patch";
 import { hasBiasEdge, type BlockAnalysis } from "./analyse-block";
 import { growthOf, methodOf, type MethodOfPatch } from "./cut-method";
-import { sayShape } from "./name-shape";
+import { sayQuarterSquare, sayShape } from "./name-shape";
 import { offsetOutwards } from "./offset";
 import { normalTurn, toOrigin, turned } from "./plane";
 
@@ -65,7 +65,7 @@ function pieceOf(patch: Patch, { key, role, lying, made, rules, copies, directed
   return {
     key,
     letter: patch.letter,
-    name: made.method.kind === "quarter-square" ? sayShape(lying, system).replace("Half-square", "Quarter-square") : sayShape(lying, system),
+    name: made.method.kind === "quarter-square" ? sayQuarterSquare(lying, system) : sayShape(lying, system),
     role,
     count: copies,
     finished: lying,

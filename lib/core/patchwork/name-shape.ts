@@ -85,8 +85,7 @@ const MANY: Readonly<Record<number, string>> = { 4: "Four-sided shape", 5: "Pent
 /** "Square, 3 in", "Half-square triangle, 3 in"; sizes as finished, exact to three decimals of an inch. */
 export function sayShape(polygon: Polygon, system: MeasureSystem): string {
   const shape = nameShape(polygon);
-  const size = (units: number) => (system === "yards" ? formatExactInches(units) : formatCentimetres(units));
-  const unit = system === "yards" ? "in" : "cm";
+  const { size, unit } = inSystem(system);
   switch (shape.kind) {
     case "square":
       return `Square, ${size(shape.side)} ${unit}`;
@@ -110,4 +109,14 @@ export function sayShape(polygon: Polygon, system: MeasureSystem): string {
       return `${name}, ${size(height)} × ${size(width)} ${unit}`;
     }
   }
+}
+
+/** A right triangle that is cut from a square cut twice is named by its long side, as quilters do: "Quarter-square triangle, 6 in". */
+export function sayQuarterSquare(polygon: Polygon, system: MeasureSystem): string {
+  const { size, unit } = inSystem(system);
+  return `Quarter-square triangle, ${size(Math.max(...sidesOf(polygon).map(sideLength)))} ${unit}`;
+}
+
+function inSystem(system: MeasureSystem): { size: (units: number) => string; unit: string } {
+  return system === "yards" ? { size: (units) => formatExactInches(units), unit: "in" } : { size: (units) => formatCentimetres(units), unit: "cm" };
 }

@@ -61,6 +61,7 @@ describe("cut lists that a quilter knows (common practice)", () => {
     const { list } = analysed("sawtooth-star");
     const squares = list.flatMap(({ method, role, count }) => (method.kind === "quarter-square" || method.kind === "half-square" ? [`${count} ${role} ${exactInches(method.square.ruler)}`] : []));
     expect(squares.sort()).toEqual(["4 light 7.25", "8 dark 3.875"]);
+    expect(list.map((piece) => piece.name)).toContain("Quarter-square triangle, 6 in");
   });
 
   it("a square set on point in a 6 in block has sides of 3 times the root of 2", () => {
