@@ -3,9 +3,7 @@ import { fail, ok, type Result } from "@/lib/core/result";
 import { answerOnce } from "@/lib/data/answer-once";
 import { recordChange } from "@/lib/data/record-change";
 import { bumpRevision } from "@/lib/data/revisions";
-import { lockBolts } from "@/lib/data/stock/lock-bolts";
-import { changePromise } from "@/lib/data/stock/promises";
-import { settleBolt } from "@/lib/data/stock/settle-bolt";
+import { releaseRun } from "@/lib/data/stock/release-reservation";
 import { db } from "@/models/database";
 
 /**
@@ -15,22 +13,18 @@ import { db } from "@/models/database";
 export async function cancelRun(actor: Actor, input: { requestId: string; code: string; reason: string }): Promise<Result<{ code: string }>> {
   if (!can(actor, "run.cancel")) return fail("forbidden", "Runs are cancelled by managers and owners.");
   return answerOnce(actor, "run.cancel", input, async (transaction) => {
-    const run = await db().Run.findOne({ where: { code: input.code }, lock: transaction.LOCK.UPDATE, transaction });
+    const run = await db().Run.findOne({ where: { code: input.code }, lock: transaction.LOCK.NO_KEY_UPDATE, transaction });
     if (!run) return fail("unknown-run", `No run has the code ${input.code}.`);
     if (run.state === "cancelled" || run.state === "packed") return fail("run-over", `Run ${run.code} is ${run.state} already.`);
     const cut = await db().RunLength.count({ where: { runId: run.id, state: "cut" }, transaction });
     if (cut > 0) return fail("run-begun", `${cut} lengths of run ${run.code} are cut. Undo them at the table first, or finish the run.`);
-    const lengths = await db().RunLength.findAll({ where: { runId: run.id, state: ["to-cut", "short"] }, order: [["id", "ASC"]], transaction });
-    const bolts = await lockBolts(transaction, lengths.flatMap((each) => (each.boltId === null ? [] : [each.boltId])));
-    for (const each of lengths) {
-      if (each.boltId !== null && each.state === "to-cut") await changePromise(transaction, { boltId: each.boltId, runId: run.id, length: each.length }, -1, actor.personId);
-    }
-    for (const bolt of bolts.values()) await settleBolt(transaction, actor, bolt);
+    await releaseRun(transaction, actor, run.id);
     await db().RunLength.update({ state: "cancelled" }, { where: { runId: run.id, state: ["to-cut", "short"] }, transaction });
     await db().RunKit.update({ state: "cancelled" }, { where: { runId: run.id }, transaction });
     await run.update({ state: "cancelled" }, { transaction });
     await recordChange(transaction, actor, { subject: "run", subjectId: run.id, act: "cancelled", details: { reason: input.reason } });
     bumpRevision("runs", transaction);
+    bumpRevision("bolts", transaction);
     bumpRevision(`run:${run.code}`, transaction);
     return ok({ code: run.code });
   });

@@ -5,7 +5,7 @@ import type { BoltPlan, BoltPlanInput, PlanBolt } from "@/lib/core/piece/bolt-pl
 import type { Actor } from "@/lib/core/policy/policy";
 import { fail, ok, type Result } from "@/lib/core/result";
 import { getColourway } from "@/lib/data/designs/kits";
-import { requireShop } from "@/lib/data/shop";
+import { requireShop, type ShopView } from "@/lib/data/shop";
 import { db } from "@/models/database";
 
 /** Nodes of the bolt plan's search: enough to prove the demo shop's runs, little enough to answer at once. */
@@ -24,26 +24,40 @@ export interface RunPlan {
 export async function planRun(_actor: Actor, { colourwayId, kits }: { colourwayId: number; kits: number }): Promise<Result<RunPlan>> {
   const found = await getColourway(colourwayId);
   if (!found) return fail("unknown-colourway", "There is no such colourway; it may have been put away.");
-  return planOnBolts(found.colourway.lengths, kits);
+  return planOnBolts(found.colourway.lengths, kits, await requireShop());
 }
 
-/** The same inside a transaction, with the bolts of the fabrics locked in id order. */
+/**
+ * The same inside a transaction, with the bolts of the fabrics locked in id order. The shop's rules are handed in, so
+ * that a transaction never waits for a second connection.
+ */
 export async function planOnBolts(
   lengths: readonly { fabricId: number; cutLength: number; plannedWidth: number }[],
   kits: number,
+  shop: Pick<ShopView, "straightening" | "saleableRemnant">,
   transaction?: Transaction,
 ): Promise<Result<RunPlan>> {
-  const shop = await requireShop();
   const fabricIds = [...new Set(lengths.map((each) => each.fabricId))];
+  const names = await readFabricNames(fabricIds, transaction);
   const input: BoltPlanInput = {
     kits,
-    lengths: lengths.map((each) => ({ fabric: String(each.fabricId), length: each.cutLength as Length, plannedWidth: each.plannedWidth as Length })),
+    lengths: lengths.map((each) => ({
+      fabric: String(each.fabricId),
+      name: names.get(each.fabricId),
+      length: each.cutLength as Length,
+      plannedWidth: each.plannedWidth as Length,
+    })),
     bolts: await listPlanBolts(fabricIds, transaction),
     straightening: shop.straightening,
     saleableRemnant: shop.saleableRemnant,
   };
-  const planned = await planBolts(input, BUDGET, null);
+  const planned = await planBolts(input, BUDGET);
   return planned.ok ? ok({ input, plan: planned.value }) : planned;
+}
+
+async function readFabricNames(fabricIds: readonly number[], transaction?: Transaction): Promise<Map<number, string>> {
+  const fabrics = await db().Fabric.findAll({ where: { id: [...fabricIds] }, attributes: ["id", "name"], raw: true, transaction });
+  return new Map(fabrics.map((fabric) => [fabric.id, fabric.name]));
 }
 
 interface Row {

@@ -18,6 +18,7 @@ export interface RunListing {
   readonly state: RunState;
   readonly lengths: number;
   readonly cut: number;
+  /** Lengths promised to the run that no longer fit on their bolts. */
   readonly short: number;
   readonly packed: number;
   readonly madeAt: string;
@@ -64,7 +65,7 @@ const LISTING = `
   SELECT r.id, r.code, k.name AS kit, k.slug AS "kitSlug", c.name AS colourway, c.id AS "colourwayId", r.kits, r.purpose, r.due::text, r.state, r.made_at AS "madeAt",
          (SELECT count(*)::int FROM run_lengths l WHERE l.run_id = r.id AND l.state <> 'cancelled') AS lengths,
          (SELECT count(*)::int FROM run_lengths l WHERE l.run_id = r.id AND l.state = 'cut') AS cut,
-         (SELECT count(*)::int FROM run_lengths l WHERE l.run_id = r.id AND l.state = 'short') AS short,
+         (SELECT COALESCE(SUM(v.count), 0)::int FROM reservations v WHERE v.run_id = r.id AND v.state = 'short') AS short,
          (SELECT count(*)::int FROM run_kits x WHERE x.run_id = r.id AND x.state IN ('packed','sold')) AS packed
     FROM runs r JOIN colourways c ON c.id = r.colourway_id
     JOIN kit_versions v ON v.id = c.kit_version_id JOIN kit_designs k ON k.id = v.kit_design_id`;

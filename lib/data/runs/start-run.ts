@@ -9,9 +9,7 @@ import { queuePrint } from "@/lib/data/print/queue";
 import { recordChange } from "@/lib/data/record-change";
 import { bumpRevision } from "@/lib/data/revisions";
 import { requireShop } from "@/lib/data/shop";
-import { lockBolts } from "@/lib/data/stock/lock-bolts";
-import { changePromise } from "@/lib/data/stock/promises";
-import { settleBolt } from "@/lib/data/stock/settle-bolt";
+import { reserveInside } from "@/lib/data/stock/reserve-lengths";
 import { db } from "@/models/database";
 import { planOnBolts } from "./plan-run";
 
@@ -24,16 +22,23 @@ export interface StartRunInput {
   readonly due: string | null;
 }
 
+interface Started {
+  readonly runId: number;
+  readonly code: string;
+  readonly kits: number;
+}
+
 /**
  * Starts a run: plans it on the bolts as they stand under their locks, reserves every length, gives each kit its serial
  * and puts the bag tags on the print queue. A request: refused with figures when the bolts do not allow so many kits.
  */
-export async function startRun(actor: Actor, input: StartRunInput): Promise<Result<{ runId: number; code: string; kits: number }>> {
+export async function startRun(actor: Actor, input: StartRunInput): Promise<Result<Started>> {
   if (!can(actor, "run.start")) return fail("forbidden", "Runs are started by managers and owners.");
-  return answerOnce(actor, "run.start", input, async (transaction) => {
-    const found = await getColourway(input.colourwayId);
+  const shop = await requireShop();
+  const found = await getColourway(input.colourwayId);
+  return answerOnce<Started, string>(actor, "run.start", input, async (transaction) => {
     if (!found) return fail("unknown-colourway", "There is no such colourway; it may have been put away.");
-    const planned = await planOnBolts(found.colourway.lengths, input.kits, transaction);
+    const planned = await planOnBolts(found.colourway.lengths, input.kits, shop, transaction);
     if (!planned.ok) return planned;
     const { plan } = planned.value;
     if (plan.kits < input.kits) {
@@ -48,7 +53,7 @@ export async function startRun(actor: Actor, input: StartRunInput): Promise<Resu
     const kits = await makeKits(transaction, run.id, input.kits, found.kit.notions);
     await layLengths(transaction, { runId: run.id, plan, lengths: found.colourway.lengths, kits });
     await reserve(transaction, actor, run.id, plan);
-    await queueBagTags(transaction, actor, { code, name: `${found.kit.name}, ${found.colourway.name}`, kits });
+    await queueBagTags(transaction, actor, { code, kitName: found.kit.name, colourway: found.colourway.name, kits });
     await recordChange(transaction, actor, { subject: "run", subjectId: run.id, act: "started", details: { kits: input.kits } });
     bumpRevision("runs", transaction);
     bumpRevision("bolts", transaction);
@@ -102,13 +107,9 @@ async function layLengths(transaction: Transaction, { runId, plan, lengths, kits
 /** The plan was made under the bolts' locks, so every promise fits; one that does not is a fault of the planner. */
 async function reserve(transaction: Transaction, actor: Actor, runId: number, plan: BoltPlan): Promise<void> {
   const boltIds = await boltIdsOf(transaction, plan);
-  for (const { bolt, length, count } of promisesOf(plan)) {
-    await changePromise(transaction, { boltId: need(boltIds.get(bolt)), runId, length }, count, actor.personId);
-  }
-  for (const bolt of (await lockBolts(transaction, [...boltIds.values()])).values()) {
-    const short = await settleBolt(transaction, actor, bolt);
-    if (short.length) throw new Error(`The bolt plan promised more of bolt ${bolt.tag} than fits on it.`);
-  }
+  const demands = promisesOf(plan).map(({ bolt, length, count }) => ({ boltId: need(boltIds.get(bolt)), length, count }));
+  const reserved = await reserveInside(transaction, actor, { runId, demands });
+  if (!reserved.ok) throw new Error(`The bolt plan does not fit its own bolts: ${reserved.fault.message}`);
 }
 
 function promisesOf(plan: BoltPlan): { bolt: string; length: number; count: number }[] {
@@ -121,10 +122,23 @@ function promisesOf(plan: BoltPlan): { bolt: string; length: number; count: numb
   return [...promises.values()];
 }
 
-async function queueBagTags(transaction: Transaction, actor: Actor, { code, name, kits }: { code: string; name: string; kits: readonly KitRow[] }): Promise<void> {
-  const shop = await requireShop();
-  const tags = kits.map((kit) => ({ shop: shop.name, run: code, kit: name, number: kit.number, of: kits.length, serial: kit.serial }));
-  await queuePrint(transaction, actor, { printer: "label-small", title: `Bag tags, ${name}, ${code}`, document: { kind: "bag-tag", tags }, copies: 1 });
+interface Bags {
+  readonly code: string;
+  readonly kitName: string;
+  readonly colourway: string;
+  readonly kits: readonly KitRow[];
+}
+
+interface BagTags {
+  readonly code: string;
+  readonly kit: string;
+  readonly colourway: string;
+  readonly kits: readonly KitRow[];
+}
+
+async function queueBagTags(transaction: Transaction, actor: Actor, { code, kit, colourway, kits }: BagTags): Promise<void> {
+  const content = kits.map((each) => ({ run: `Run ${code}`, kitName: kit, colourway, bag: each.number, of: kits.length, serial: each.serial }));
+  await queuePrint(transaction, actor, { printer: "label-small", title: `Bag tags, ${kit}, ${code}`, document: { kind: "bag-tag", content }, copies: 1 });
 }
 
 function kitCuts(plan: BoltPlan): PlannedCut[] {
