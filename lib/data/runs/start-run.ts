@@ -53,7 +53,7 @@ export async function startRun(actor: Actor, input: StartRunInput): Promise<Resu
     const kits = await makeKits(transaction, run.id, input.kits, found.kit.notions);
     await layLengths(transaction, { runId: run.id, plan, lengths: found.colourway.lengths, kits });
     await reserve(transaction, actor, run.id, plan);
-    await queueBagTags(transaction, actor, { code, kitName: found.kit.name, colourway: found.colourway.name, kits });
+    await queueBagTags(transaction, actor, { code, kit: found.kit.name, colourway: found.colourway.name, kits });
     await recordChange(transaction, actor, { subject: "run", subjectId: run.id, act: "started", details: { kits: input.kits } });
     bumpRevision("runs", transaction);
     bumpRevision("bolts", transaction);
@@ -120,13 +120,6 @@ function promisesOf(plan: BoltPlan): { bolt: string; length: number; count: numb
     promises.set(key, { bolt: cut.bolt, length, count: 1 + (promises.get(key)?.count ?? 0) });
   }
   return [...promises.values()];
-}
-
-interface Bags {
-  readonly code: string;
-  readonly kitName: string;
-  readonly colourway: string;
-  readonly kits: readonly KitRow[];
 }
 
 interface BagTags {
