@@ -19,7 +19,7 @@ const config = {
   turbopack: { root },
   // These load files or native code at run time, or lose their names when they are minified.
   serverExternalPackages: ["sequelize", "pg", "pdfkit", "bwip-js", "highs", "sharp", "@node-rs/argon2", "nodemailer"],
-  experimental: { serverActions: { bodySizeLimit: "2mb" } },
+  experimental: { authInterrupts: true, serverActions: { bodySizeLimit: "2mb" } },
   async headers() {
     return [
       { source: "/:path*", headers: securityHeaders },

@@ -2,7 +2,6 @@ import type { Metadata } from "next";
 import type { ReactNode } from "react";
 import { DayRod } from "@/components/shell/day-rod";
 import { PageHead } from "@/components/shell/page-head";
-import { StaffShell } from "@/components/shell/staff-shell";
 import { BackLink } from "@/components/ui/back-link";
 import { Button } from "@/components/ui/button";
 import { Checkbox, RadioRow } from "@/components/ui/choices";
@@ -23,6 +22,7 @@ import { LinkTabs } from "@/components/ui/tabs";
 import { Select, TextArea, TextInput } from "@/components/ui/text-input";
 import { centimetres, inches, yards } from "@/lib/core/measure/length";
 import { BoltsSample, DialogSample, LengthSample, TabsSample, ToastSample } from "./samples";
+import { requireActor } from "@/lib/server/auth/require-actor";
 import { FABRICS } from "./sample-fabrics";
 
 export const metadata: Metadata = { title: "Component sheet" };
@@ -30,9 +30,10 @@ export const metadata: Metadata = { title: "Component sheet" };
 const COLOURS = ["paper", "flax", "flax-2", "walnut", "walnut-2", "walnut-3", "rod", "brass", "indigo", "madder", "weld", "green"] as const;
 
 /** Every component on one sheet, for those who draw pages: by eye, by key and by machine. */
-export default function ComponentSheet() {
+export default async function ComponentSheet() {
+  await requireActor("today.see");
   return (
-    <StaffShell person={{ name: "Ines Halloran", roles: ["owner"] }} signOut={<button type="button">Sign out</button>}>
+    <>
       <ClothPatterns fabrics={FABRICS} />
       <PageHead
         back={<BackLink href="/staff">Today</BackLink>}
@@ -218,7 +219,7 @@ export default function ComponentSheet() {
           12 7⁄8
         </p>
       </Section>
-    </StaffShell>
+    </>
   );
 }
 

@@ -29,7 +29,7 @@ export async function listTills(): Promise<TillView[]> {
 export async function openTill(actor: Actor, input: { requestId: string; tillId: number; float: number }): Promise<Result<{ sessionId: number }, TillFault>> {
   if (!can(actor, "till.open")) return forbidden();
   return answerOnce(actor, "till.open", input, async (transaction) => {
-    const till = await db().Till.findByPk(input.tillId, { transaction, lock: transaction.LOCK.UPDATE });
+    const till = await db().Till.findByPk(input.tillId, { transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
     if (!till) return fail("unknown-till", "There is no such till.");
     if (await openSession(transaction, till.id)) return fail("already-open", `${till.name} is open already. Close it first, or use another till.`);
     const session = await db().TillSession.create({ tillId: till.id, openedBy: actor.personId }, { transaction });
@@ -85,7 +85,7 @@ async function openSession(transaction: Transaction, tillId: number) {
 }
 
 async function lockOpen(transaction: Transaction, id: number) {
-  return db().TillSession.findOne({ where: { id, closedAt: null }, transaction, lock: transaction.LOCK.UPDATE });
+  return db().TillSession.findOne({ where: { id, closedAt: null }, transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
 }
 
 function notOpen() {

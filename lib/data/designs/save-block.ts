@@ -48,7 +48,7 @@ export async function keepBlockVersion(actor: Actor, input: Content & { requestI
   const fault = faultOf(input);
   if (fault) return fault;
   return answerOnce(actor, "block.keep", input, async (transaction) => {
-    const block = await db().Block.findByPk(input.blockId, { transaction, lock: transaction.LOCK.UPDATE });
+    const block = await db().Block.findByPk(input.blockId, { transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
     if (!block) return unknownBlock();
     const version = await insertVersion(transaction, actor, block.id, block.name, input);
     await db().BlockDraft.destroy({ where: { blockId: block.id, personId: actor.personId }, transaction });

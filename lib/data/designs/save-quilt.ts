@@ -32,7 +32,7 @@ export async function keepQuiltVersion(actor: Actor, input: KeepQuiltInput): Pro
     const quilt =
       input.quiltId === null
         ? await db().Quilt.create({ slug: await freeSlug(transaction, "quilts", input.name), name: input.name, madeBy: actor.personId }, { transaction })
-        : await db().Quilt.findByPk(input.quiltId, { transaction, lock: transaction.LOCK.UPDATE });
+        : await db().Quilt.findByPk(input.quiltId, { transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
     if (!quilt) return fail("unknown-quilt", "There is no such quilt; it may have been put away.");
     if (quilt.name !== input.name) await quilt.update({ name: input.name }, { transaction });
     const version = 1 + ((await db().QuiltVersion.max<number, InstanceType<ReturnType<typeof db>["QuiltVersion"]>>("version", { where: { quiltId: quilt.id }, transaction })) ?? 0);

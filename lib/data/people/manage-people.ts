@@ -58,7 +58,7 @@ export interface ChangeInput {
 export async function changePerson(actor: Actor, input: ChangeInput): Promise<Result<{ personId: number }, Fault>> {
   if (!can(actor, "people.manage")) return forbidden();
   return answerOnce(actor, "people.change", input, async (transaction) => {
-    const person = await db().Person.findByPk(input.personId, { transaction, lock: transaction.LOCK.UPDATE });
+    const person = await db().Person.findByPk(input.personId, { transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
     if (!person) return unknown();
     const staysOwner = input.active && input.roles.includes("owner");
     if (!staysOwner && (await isLastOwner(transaction, person.id))) {
@@ -88,7 +88,7 @@ async function isLastOwner(transaction: Transaction, personId: number): Promise<
   const owners = await db().Person.findAll({
     where: { active: true, roles: { [Op.contains]: ["owner"] } },
     order: [["id", "ASC"]],
-    lock: transaction.LOCK.UPDATE,
+    lock: transaction.LOCK.NO_KEY_UPDATE,
     transaction,
   });
   return owners.length === 1 && owners[0]?.id === personId;

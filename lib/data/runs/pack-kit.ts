@@ -111,7 +111,7 @@ export async function finishKit(actor: Actor, input: { requestId: string; serial
 }
 
 async function openKit(transaction: Transaction, serial: string): Promise<Result<RunKit, PackFault>> {
-  const kit = await db().RunKit.findOne({ where: { serial }, lock: transaction.LOCK.UPDATE, transaction });
+  const kit = await db().RunKit.findOne({ where: { serial }, lock: transaction.LOCK.NO_KEY_UPDATE, transaction });
   if (!kit) return fail("unknown-kit", `No kit has the serial ${serial}. Scan the tag on the bag.`);
   if (kit.state === "packed" || kit.state === "sold") return fail("already-packed", `Kit ${serial} is packed already.`);
   if (kit.state === "cancelled" || kit.state === "broken-down") return fail("unknown-kit", `Kit ${serial} was ${kit.state === "cancelled" ? "cancelled" : "broken down"}.`);
@@ -119,7 +119,7 @@ async function openKit(transaction: Transaction, serial: string): Promise<Result
 }
 
 async function packLength(transaction: Transaction, actor: Actor, kit: RunKit, runLengthId: number): Promise<Result<null, PackFault>> {
-  const length = await db().RunLength.findByPk(runLengthId, { transaction, lock: transaction.LOCK.UPDATE });
+  const length = await db().RunLength.findByPk(runLengthId, { transaction, lock: transaction.LOCK.NO_KEY_UPDATE });
   if (!length) return fail("unknown-scan", "No length has this tag.");
   if (length.runKitId !== kit.id) {
     const owner = await db().RunKit.findByPk(length.runKitId, { transaction, rejectOnEmpty: true });
@@ -132,9 +132,9 @@ async function packLength(transaction: Transaction, actor: Actor, kit: RunKit, r
 }
 
 async function packNotion(transaction: Transaction, actor: Actor, kit: RunKit, scan: string): Promise<Result<null, PackFault>> {
-  const notion = await db().Notion.findOne({ where: { [Op.or]: [{ number: scan }, { gtin: scan }] }, lock: transaction.LOCK.UPDATE, transaction });
+  const notion = await db().Notion.findOne({ where: { [Op.or]: [{ number: scan }, { gtin: scan }] }, lock: transaction.LOCK.NO_KEY_UPDATE, transaction });
   if (!notion) return fail("unknown-scan", `“${scan.slice(0, 40)}” is neither a cut tag nor a notion of this shop.`);
-  const wanted = await db().PackedNotion.findOne({ where: { runKitId: kit.id, notionId: notion.id }, lock: transaction.LOCK.UPDATE, transaction });
+  const wanted = await db().PackedNotion.findOne({ where: { runKitId: kit.id, notionId: notion.id }, lock: transaction.LOCK.NO_KEY_UPDATE, transaction });
   if (!wanted) return fail("wrong-kit", `${notion.name} does not go into this kit.`);
   if (wanted.count >= wanted.wanted) return fail("twice", `${notion.name} is in the bag already, ${wanted.wanted} of ${wanted.wanted}.`);
   if (notion.onHand < 1) return fail("not-enough-notions", `The book has no ${notion.name} on the shelf. Count the shelf, then scan again.`);
