@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import type { Actor } from "@/lib/core/policy/policy";
 import { db } from "@/models/database";
 import type { BlockDraftView, BlockVersionView } from "./design-views";
@@ -24,8 +24,8 @@ export async function getBlock(slug: string, version?: number): Promise<BlockVer
 }
 
 /** Block versions by their ids, in no order; one query. */
-export async function getBlockVersions(ids: readonly number[]): Promise<BlockVersionView[]> {
-  return db().sequelize.query<BlockVersionView>(`${VERSION} WHERE v.id = ANY($1)`, { bind: [[...ids]], type: QueryTypes.SELECT });
+export async function getBlockVersions(ids: readonly number[], transaction?: Transaction): Promise<BlockVersionView[]> {
+  return db().sequelize.query<BlockVersionView>(`${VERSION} WHERE v.id = ANY($1)`, { bind: [[...ids]], type: QueryTypes.SELECT, transaction });
 }
 
 /** The person's own draft of a block, and who else is drafting it. */

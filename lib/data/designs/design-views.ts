@@ -69,5 +69,7 @@ export interface ColourwayView {
   /** Minor units. */
   readonly price: number;
   readonly onSale: boolean;
+  /** Finds the plan that its lengths come from. */
+  readonly planHash: string;
   readonly lengths: readonly { readonly fabricId: number; readonly cutLength: number; readonly plannedWidth: number }[];
 }

@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import type { Length } from "@/lib/core/measure/length";
 import { db } from "@/models/database";
 
@@ -35,9 +35,9 @@ export async function listFabrics(most = 1000): Promise<FabricView[]> {
   return db().sequelize.query<FabricView>(`${SELECT} ORDER BY f.name, f.id LIMIT $1`, { bind: [most], type: QueryTypes.SELECT });
 }
 
-export async function getFabrics(ids: readonly number[]): Promise<FabricView[]> {
+export async function getFabrics(ids: readonly number[], transaction?: Transaction): Promise<FabricView[]> {
   if (ids.length === 0) return [];
-  return db().sequelize.query<FabricView>(`${SELECT} WHERE f.id = ANY($1)`, { bind: [[...ids]], type: QueryTypes.SELECT });
+  return db().sequelize.query<FabricView>(`${SELECT} WHERE f.id = ANY($1)`, { bind: [[...ids]], type: QueryTypes.SELECT, transaction });
 }
 
 export async function getFabric(slug: string): Promise<FabricView | null> {

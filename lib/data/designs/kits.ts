@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import { db } from "@/models/database";
 import type { ColourwayView, KitVersionView } from "./design-views";
 
@@ -10,7 +10,7 @@ const VERSION = `
 const NEWEST = `v.version = (SELECT max(version) FROM kit_versions WHERE kit_design_id = k.id)`;
 
 const COLOURWAY = `
-  SELECT c.id, c.kit_version_id AS "kitVersionId", c.name, c.fabrics, c.price, c.on_sale AS "onSale",
+  SELECT c.id, c.kit_version_id AS "kitVersionId", c.name, c.fabrics, c.price, c.on_sale AS "onSale", c.plan_hash AS "planHash",
          COALESCE((SELECT jsonb_agg(jsonb_build_object('fabricId', l.fabric_id, 'cutLength', l.cut_length, 'plannedWidth', l.planned_width)
                                     ORDER BY l.cut_length DESC, l.fabric_id)
                      FROM colourway_lengths l WHERE l.colourway_id = c.id), '[]') AS lengths
@@ -36,10 +36,10 @@ export async function getKit(slug: string, version?: number): Promise<KitListing
 }
 
 /** A colourway with its kit version; null when there is none. */
-export async function getColourway(id: number): Promise<{ kit: KitVersionView; colourway: ColourwayView } | null> {
-  const [colourway] = await db().sequelize.query<ColourwayView>(`${COLOURWAY} WHERE c.id = $1`, { bind: [id], type: QueryTypes.SELECT });
+export async function getColourway(id: number, transaction?: Transaction): Promise<{ kit: KitVersionView; colourway: ColourwayView } | null> {
+  const [colourway] = await db().sequelize.query<ColourwayView>(`${COLOURWAY} WHERE c.id = $1`, { bind: [id], type: QueryTypes.SELECT, transaction });
   if (!colourway) return null;
-  const [kit] = await db().sequelize.query<KitVersionView>(`${VERSION} WHERE v.id = $1`, { bind: [colourway.kitVersionId], type: QueryTypes.SELECT });
+  const [kit] = await db().sequelize.query<KitVersionView>(`${VERSION} WHERE v.id = $1`, { bind: [colourway.kitVersionId], type: QueryTypes.SELECT, transaction });
   return kit ? { kit, colourway } : null;
 }
 

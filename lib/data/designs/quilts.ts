@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import type { BlockSize } from "@/lib/core/piece/drawing";
 import type { QuiltDesign } from "@/lib/core/piece/quilt-design";
 import type { StoredQuilt } from "@/lib/input/quilt";
@@ -29,9 +29,9 @@ export async function getQuilt(slug: string, version?: number): Promise<QuiltVer
   return (await withDesigns(rows))[0] ?? null;
 }
 
-export async function getQuiltVersion(versionId: number): Promise<QuiltVersionView | null> {
-  const rows = await db().sequelize.query<Row>(`${VERSION} WHERE v.id = $1`, { bind: [versionId], type: QueryTypes.SELECT });
-  return (await withDesigns(rows))[0] ?? null;
+export async function getQuiltVersion(versionId: number, transaction?: Transaction): Promise<QuiltVersionView | null> {
+  const rows = await db().sequelize.query<Row>(`${VERSION} WHERE v.id = $1`, { bind: [versionId], type: QueryTypes.SELECT, transaction });
+  return (await withDesigns(rows, transaction))[0] ?? null;
 }
 
 /** A stored quilt with the drawings of its block versions. Null when a version that it names does not exist. */
@@ -40,9 +40,9 @@ export async function resolveQuilt(stored: StoredQuilt): Promise<QuiltDesign | n
   return designOf(stored, (id) => versions.get(id));
 }
 
-async function withDesigns(rows: readonly Row[]): Promise<QuiltVersionView[]> {
+async function withDesigns(rows: readonly Row[], transaction?: Transaction): Promise<QuiltVersionView[]> {
   const ids = [...new Set(rows.flatMap((row) => row.stored.blocks.map((block) => block.blockVersionId)))];
-  const versions = new Map((ids.length ? await getBlockVersions(ids) : []).map((each) => [each.versionId, each]));
+  const versions = new Map((ids.length ? await getBlockVersions(ids, transaction) : []).map((each) => [each.versionId, each]));
   return rows.flatMap((row) => {
     const design = designOf(row.stored, (id) => versions.get(id));
     return design ? [{ ...row, design }] : [];
