@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import type { Length } from "@/lib/core/measure/length";
 import type { CuttingRules } from "@/lib/core/piece/cut-piece";
 import type { AllowanceRules } from "@/lib/core/piece/strip-plan";
@@ -29,21 +29,21 @@ export interface ShopView {
 }
 
 /** The shop, or null on a database that the first-run page has not filled yet. */
-export async function getShop(): Promise<ShopView | null> {
+export async function getShop(transaction?: Transaction): Promise<ShopView | null> {
   const [shop] = await db().sequelize.query<ShopView>(
     `SELECT name, address, email, currency, locale, time_zone AS "timeZone", system, paper, seam_allowance AS "seamAllowance",
             ruler_step AS "rulerStep", selling_step AS "sellingStep", least_cut AS "leastCut", straightening,
             mis_cut_basis_points AS "misCutBasisPoints", end_of_bolt AS "endOfBolt", saleable_remnant AS "saleableRemnant",
             labour_rate AS "labourRate", tax_by AS "taxBy", tax_included AS "taxIncluded", cash_step AS "cashStep"
        FROM shops WHERE id = 1`,
-    { type: QueryTypes.SELECT },
+    { type: QueryTypes.SELECT, transaction },
   );
   return shop ?? null;
 }
 
 /** The shop, which is there on every page behind the sign-in. */
-export async function requireShop(): Promise<ShopView> {
-  const shop = await getShop();
+export async function requireShop(transaction?: Transaction): Promise<ShopView> {
+  const shop = await getShop(transaction);
   if (!shop) throw new Error("The shop has not been set up yet.");
   return shop;
 }
