@@ -41,14 +41,15 @@ const forbidden = [
   never("core-room-unknown", { path: ALL_OF_CORE, pathNot: [CORE_FILES, ...core("measure", "money", "piece", "patchwork", "cutting", "kit", "codes", "policy")] }, "A new room of the core needs a rule of its own.", {}),
 
   ...room("input", INPUT, "What a request may hold is checked with zod, and speaks of the core's types.", [ALL_OF_CORE, ...packages("zod")]),
-  ...room("data", "^lib/data/", "The data layer knows the core and the models, and no page.", [ALL_OF_CORE, INPUT, "^models/", ...packages("sequelize", "pg", "zod", "@node-rs/argon2")], { node: true }),
+  ...room("data", "^lib/data/", "The data layer knows the core and the models, and no page.", [ALL_OF_CORE, INPUT, "^models/", "^labels/", ...packages("sequelize", "pg", "zod", "@node-rs/argon2")], { node: true }),
+  never("data-labels", { path: "^lib/data/" }, "The data layer fills in what a document says; drawing it is the server's.", { path: "^labels/", dependencyTypesNot: ["type-only"] }),
   ...room("offline", "^lib/offline/", "The browser's queue knows the core.", [ALL_OF_CORE, INPUT, ...packages("idb", "zod")]),
   never("server", { path: "^lib/server/" }, "The server's doors know the core, the data layer and the labels.", { path: [UPPER_ROOMS, "^lib/offline/"], pathNot: "^labels/" }),
   never("lib-room-unknown", { path: "^lib/", pathNot: "^lib/(core|input|data|server|offline)/" }, "A new room of lib needs a rule of its own.", {}),
 
   ...room("models", "^models/", "Models know the core and Sequelize.", [ALL_OF_CORE, ...packages("sequelize", "pg")], { node: true }),
   ...room("migrations", "^migrations/", "A migration stays as it was written, so it knows nothing that changes.", packages("pg", "umzug"), { node: true }),
-  ...room("seeders", "^seeders/", "The seed goes through the data layer.", [ALL_OF_CORE, INPUT, "^lib/data/", "^models/", ...packages("sequelize", "pg")], { node: true }),
+  ...room("seeders", "^seeders/", "The seed goes through the data layer.", [ALL_OF_CORE, INPUT, "^lib/data/", "^models/", ...packages("sequelize", "pg", "highs")], { node: true }),
   ...room("labels", "^labels/", "Labels are plain data made into PDF.", [ALL_OF_CORE, "^fonts/", ...packages("pdfkit", "bwip-js")], { node: true }),
   ...room("components", "^components/", "Components get props and give callbacks.", [ALL_OF_CORE, INPUT, ...NEXT_FOR_COMPONENTS, ...packages("react", "react-dom", "@tanstack/[^/]+", "react-hook-form", "@hookform/resolvers", "zod")]),
   never("app", { path: "^app/" }, "Pages know lib, labels and components.", { path: "^(models|migrations|seeders|scripts|tests)/" }),

@@ -10,22 +10,16 @@ export interface Section {
 export const SECTIONS: readonly Section[] = [
   { href: "/staff", label: "Today", permission: "today.see" },
   { href: "/staff/blocks", label: "Blocks", permission: "block.see" },
-  { href: "/staff/quilts", label: "Quilts", permission: "quilt.see" },
   { href: "/staff/kits", label: "Kits", permission: "kit.see" },
   { href: "/staff/bolts", label: "Bolts", permission: "bolt.see" },
   { href: "/staff/runs", label: "Runs", permission: "run.see" },
   { href: "/table", label: "Cutting", permission: "run.cut" },
+  { href: "/staff/packing", label: "Packing", permission: "kit.pack" },
   { href: "/counter", label: "Counter", permission: "till.sell" },
-  { href: "/staff/exceptions", label: "Exceptions", permission: "exception.see" },
 ];
 
 /** What lies on the slip under the person's name. */
-export const OFFICE_SECTIONS: readonly Section[] = [
-  { href: "/staff/print", label: "Print queue", permission: "print.see" },
-  { href: "/staff/people", label: "People", permission: "people.see" },
-  { href: "/staff/mail", label: "Mail", permission: "mail.read" },
-  { href: "/staff/settings", label: "Settings", permission: "settings.see" },
-];
+export const OFFICE_SECTIONS: readonly Section[] = [{ href: "/staff/design", label: "Component sheet", permission: "work.see" }];
 
 export function sectionsFor(person: Pick<Actor, "roles">, sections: readonly Section[] = SECTIONS): readonly Section[] {
   return sections.filter((section) => can(person, section.permission));

@@ -34,6 +34,7 @@ const BROKEN: readonly (readonly [rule: string, file: string])[] = [
   ["input", "lib/input/bad.ts"],
   ["input-no-node", "lib/input/bad-node.ts"],
   ["data", "lib/data/bad.ts"],
+  ["data-labels", "lib/data/bad-label.ts"],
   ["offline", "lib/offline/bad.ts"],
   ["offline-no-node", "lib/offline/bad-node.ts"],
   ["server", "lib/server/bad.ts"],
