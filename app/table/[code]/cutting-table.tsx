@@ -21,11 +21,16 @@ interface CuttingTableProps {
 /** One number, one bolt, one big act. What is cut is kept on the tablet first and sent when the network is there. */
 export function CuttingTable({ run, person, system }: CuttingTableProps) {
   const router = useRouter();
-  const { queue, state } = useOutgoing(person.id, () => router.refresh());
+  // Taken by the server, but perhaps not yet in the run as this page last fetched it.
+  const [sent, setSent] = useState<ReadonlySet<number>>(new Set());
+  const { queue, state } = useOutgoing(person.id, (entry) => {
+    setSent((before) => new Set(before).add(Number(entry.body.runLengthId)));
+    router.refresh();
+  });
   const [tag, setTag] = useState<string | null>(null);
   const [said, setSaid] = useState<string | null>(null);
 
-  const waiting = useMemo(() => new Set(state.entries.filter((entry) => entry.state === "waiting").map((entry) => Number(entry.body.runLengthId))), [state.entries]);
+  const waiting = useMemo(() => new Set([...sent, ...state.entries.filter((entry) => entry.state === "waiting").map((entry) => Number(entry.body.runLengthId))]), [state.entries, sent]);
   const left = run.runLengths.filter((each) => each.state === "to-cut" && !waiting.has(each.id));
   const next = left[0] ?? null;
   const inHand = tag !== null && next?.boltTag === tag;
@@ -64,7 +69,7 @@ export function CuttingTable({ run, person, system }: CuttingTableProps) {
   const refused = state.entries.filter((entry) => entry.state === "refused");
   return (
     <StationShell
-      title={`${run.kit}, ${run.kits} kits`}
+      title={`${run.kit}, ${run.kits} ${run.kits === 1 ? "kit" : "kits"}`}
       sub={`${run.colourway}, ${person.place}, ${person.name}`}
       size="wall"
       connection={{ state: state.connection === "connected" ? "connected" : "lost", waiting: state.entries.filter((entry) => entry.state === "waiting").length }}

@@ -1,6 +1,7 @@
 "use client";
 
 import { useEffect, useRef, useState } from "react";
+import type { Entry } from "@/lib/offline/entry";
 import { openQueue, type OutgoingQueue, type QueueState } from "@/lib/offline/queue";
 import { sendEntry } from "@/lib/offline/send";
 import { openStore } from "@/lib/offline/store";
@@ -9,7 +10,7 @@ const TRY_AGAIN_MS = 5_000;
 const EMPTY: QueueState = { entries: [], connection: "connected" };
 
 /** The station's durable queue: kept on the device, sent as soon as the network is there. */
-export function useOutgoing(personId: number, taken: () => void): { queue: OutgoingQueue | null; state: QueueState } {
+export function useOutgoing(personId: number, taken: (entry: Entry) => void): { queue: OutgoingQueue | null; state: QueueState } {
   const [queue, setQueue] = useState<OutgoingQueue | null>(null);
   const [state, setState] = useState<QueueState>(EMPTY);
   const onTaken = useRef(taken);
@@ -20,7 +21,7 @@ export function useOutgoing(personId: number, taken: () => void): { queue: Outgo
     let over = false;
     const stops: (() => void)[] = [];
     void openStore().then(async (store) => {
-      const opened = await openQueue({ store, personId, send: (entry) => sendEntry(entry), taken: () => onTaken.current() });
+      const opened = await openQueue({ store, personId, send: (entry) => sendEntry(entry), taken: (entry) => onTaken.current(entry) });
       if (over) return;
       const show = () => setState(opened.state());
       const send = () => void opened.drain();
