@@ -48,7 +48,7 @@ export async function recordSale(actor: Actor, input: SaleInput): Promise<Result
     const taxed = await taxLines(transaction, priced, shop);
     if (!taxed.ok) return taxed;
     const settled = settle(taxed.value.total, [{ kind: "cash", given: input.cash }], shop.cashStep);
-    if (!settled.ok) return fail("not-enough", `${formatMoney(taxed.value.total, shop.currency, shop.locale)} are due; ${formatMoney(input.cash, shop.currency, shop.locale)} were given.`, settled.fault);
+    if (!settled.ok) return fail("not-enough", `${formatMoney(taxed.value.total, shop.currency, shop.locale)} are due; ${formatMoney(input.cash, shop.currency, shop.locale)} were given.`, { facts: settled.fault.facts });
     return book(transaction, actor, { input, shop, priced, taxed: taxed.value, settled: settled.value });
   });
 }
