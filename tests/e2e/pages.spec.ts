@@ -2,7 +2,7 @@ import AxeBuilder from "@axe-core/playwright";
 import { expect, test } from "@playwright/test";
 import { signInAs } from "./sign-in";
 
-for (const address of ["/staff", "/staff/blocks", "/staff/blocks/clays-choice", "/staff/kits", "/staff/kits/weir-pool", "/staff/bolts", "/staff/runs", "/staff/packing", "/table", "/counter", "/staff/design"]) {
+for (const address of ["/staff", "/staff/blocks", "/staff/blocks/clays-choice", "/staff/kits", "/staff/kits/weir-pool", "/staff/bolts", "/staff/runs", "/staff/find?q=heron", "/staff/packing", "/table", "/counter", "/staff/design"]) {
   test(`axe finds nothing on ${address}`, async ({ page }) => {
     await signInAs(page, "owner");
     await page.goto(address);
