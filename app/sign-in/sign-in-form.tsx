@@ -4,6 +4,7 @@ import { signIn } from "next-auth/react";
 import { useState, type FormEvent } from "react";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";
+import { useReady } from "@/app/use-ready";
 import { TextInput } from "@/components/ui/text-input";
 
 const SENTENCES: Readonly<Record<string, string>> = {
@@ -14,6 +15,7 @@ const SENTENCES: Readonly<Record<string, string>> = {
 /** Signs in and goes on; what was typed as e-mail stays when it fails. */
 export function SignInForm({ next }: { readonly next: string }) {
   const [error, setError] = useState<string | null>(null);
+  const ready = useReady();
   const [pending, setPending] = useState(false);
 
   async function submit(event: FormEvent<HTMLFormElement>) {
@@ -36,7 +38,7 @@ export function SignInForm({ next }: { readonly next: string }) {
       <TextInput label="E-mail" name="email" type="email" autoComplete="username" required maxLength={254} autoFocus />
       <TextInput label="Password" name="password" type="password" autoComplete="current-password" required maxLength={200} />
       <div>
-        <Button type="submit" variant="fill" pending={pending} pendingLabel="Signing in">
+        <Button type="submit" variant="fill" disabled={!ready} pending={pending} pendingLabel="Signing in">
           Sign in
         </Button>
       </div>

@@ -11,12 +11,14 @@ import type { MeasureSystem } from "@/lib/core/measure/format";
 import type { Length } from "@/lib/core/measure/length";
 import type { PackingView } from "@/lib/data/runs/pack-kit";
 import { postJson, type Posted } from "@/app/post-json";
+import { useReady } from "@/app/use-ready";
 
 /** One field takes every scan: a bag's serial opens the bag, anything else goes into it. */
 export function PackingBench({ system }: { readonly system: MeasureSystem }) {
   const [kit, setKit] = useState<PackingView | null>(null);
   const [error, setError] = useState<string | null>(null);
   const [pending, setPending] = useState(false);
+  const ready = useReady();
   const field = useRef<HTMLInputElement>(null);
 
   function take(answer: Posted<PackingView>) {
@@ -49,7 +51,7 @@ export function PackingBench({ system }: { readonly system: MeasureSystem }) {
   return (
     <div className="page-section grid gap-5">
       <form onSubmit={scan} className="flex flex-wrap items-end gap-4">
-        <TextInput ref={field} label={kit ? `Scan into bag ${kit.number}, ${kit.serial}` : "Scan the tag on the bag"} name="scan" autoComplete="off" autoFocus maxLength={80} />
+        <TextInput ref={field} label={kit ? `Scan into bag ${kit.number}, ${kit.serial}` : "Scan the tag on the bag"} name="scan" readOnly={!ready} autoComplete="off" autoFocus maxLength={80} />
         <SubmitButton variant="plain" pending={pending}>
           Take the scan
         </SubmitButton>

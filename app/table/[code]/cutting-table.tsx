@@ -100,12 +100,12 @@ export function CuttingTable({ run, person, system }: CuttingTableProps) {
               Shelf {next.shelf}, tag {next.boltTag}, lot {next.lot}. Into bag {next.kitNumber}. {inHand ? "Right bolt." : "Scan the bolt’s tag first."}
             </p>
             <form onSubmit={scan} className="flex flex-wrap items-end gap-4">
-              <TextInput label="Scan the bolt" name="tag" autoComplete="off" autoFocus size="counter" maxLength={40} />
+              <TextInput label="Scan the bolt" name="tag" readOnly={queue === null} autoComplete="off" autoFocus size="counter" maxLength={40} />
               <SubmitButton variant="plain" size="counter">
                 Take the scan
               </SubmitButton>
             </form>
-            <Button variant="fill" size="wall" onClick={() => void cut()} disabled={!inHand}>
+            <Button variant="fill" size="wall" onClick={() => void cut()} disabled={!inHand || queue === null}>
               Cut for bag {next.kitNumber}
             </Button>
           </>

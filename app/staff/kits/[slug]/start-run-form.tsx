@@ -5,6 +5,7 @@ import { useState, type FormEvent } from "react";
 import { Notice } from "@/components/ui/notice";
 import { SubmitButton } from "@/components/ui/submit-button";
 import { TextInput } from "@/components/ui/text-input";
+import { useReady } from "@/app/use-ready";
 import { beginRun } from "./actions";
 
 /** Reserves the fabric of so many kits and goes to the run's list. What was typed stays when it is refused. */
@@ -12,6 +13,7 @@ export function StartRunForm({ colourwayId, most }: { readonly colourwayId: numb
   const router = useRouter();
   const [requestId, setRequestId] = useState(() => crypto.randomUUID());
   const [error, setError] = useState<string | null>(null);
+  const ready = useReady();
   const [pending, setPending] = useState(false);
 
   async function submit(event: FormEvent<HTMLFormElement>) {
@@ -32,7 +34,7 @@ export function StartRunForm({ colourwayId, most }: { readonly colourwayId: numb
       {error ? <Notice kind="error">{error}</Notice> : null}
       <TextInput label="Make kits" name="kits" inputMode="numeric" defaultValue={String(Math.max(1, Math.min(3, most)))} required maxLength={4} />
       <TextInput label="By when" name="due" type="date" optional />
-      <SubmitButton pending={pending}>Reserve fabric</SubmitButton>
+      <SubmitButton disabled={!ready} pending={pending}>Reserve fabric</SubmitButton>
     </form>
   );
 }
