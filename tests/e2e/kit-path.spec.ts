@@ -40,6 +40,8 @@ test("a cutter cuts every length by scan, and a wrong bolt is refused", async ({
     await expect(page.getByText(`${length} of 3 cut`)).toBeVisible();
   }
   await expect(page.getByText("Every length of this run is cut.")).toBeVisible();
+  // The table shows a cut as soon as it is kept; the book has it once nothing waits.
+  await expect(page.getByText("nothing waits to be sent")).toBeVisible();
   await page.goto(`/staff/runs/${runCode}`);
   await expect(page.getByRole("table", { name: "Lengths in cutting order" }).getByRole("cell", { name: "cut", exact: true })).toHaveCount(3);
 });
